@@ -19,7 +19,7 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          include: ['tests/{shared,analysis,house,demo}/**/*.test.ts'],
+          include: ['tests/{shared,analysis,demo}/**/*.test.ts', 'tests/house/{imports,words}.test.ts'],
           environment: 'node',
         },
       },
@@ -29,7 +29,7 @@ export default defineConfig({
       },
       {
         extends: true,
-        test: { name: 'api', include: ['tests/server/**/*.test.ts'], environment: 'node', testTimeout: 30_000, hookTimeout: 60_000 },
+        test: { name: 'api', include: ['tests/server/**/*.test.ts', 'tests/house/{tenancy,contract}.test.ts'], environment: 'node', testTimeout: 30_000, hookTimeout: 60_000 },
       },
       {
         extends: true,

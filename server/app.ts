@@ -1,0 +1,73 @@
+import express, { type Express } from 'express';
+import { Pool } from 'pg';
+import type { Logger } from 'pino';
+import type { DataSource } from 'typeorm';
+import type { Config } from './config.ts';
+import { makeDataSource, refuseStrongRole } from './db/data-source.ts';
+import { ENTITIES } from './entities.ts';
+import { serveFeatures } from './features.ts';
+import { Api } from './http/api.ts';
+import { serveClient } from './http/client-files.ts';
+import { refuseCrossSite } from './http/cross-site.ts';
+import { securityHeaders } from './http/headers.ts';
+import { problemHandler } from './http/problems.ts';
+import { Throttle } from './http/rate-limit.ts';
+import { requestLog } from './http/request-log.ts';
+import { sessions } from './http/session.ts';
+import { notFound } from './problem.ts';
+
+/** Longest time one analysis statement may take, ms. */
+const HEAVY_STATEMENT_MS = 30_000;
+const HEAVY_POOL = 2;
+
+export interface LoafmarkApp {
+  express: Express;
+  api: Api;
+  source: DataSource;
+  /** From now on `ready` says no. */
+  startStopping(): void;
+  close(): Promise<void>;
+}
+
+/** Wires the whole server over its database; listens to nothing yet. */
+export async function makeApp(config: Config, logger: Logger): Promise<LoafmarkApp> {
+  const source = makeDataSource({ url: config.databaseUrl, poolSize: config.poolSize, entities: ENTITIES });
+  const heavySource = makeDataSource({ url: config.databaseUrl, poolSize: HEAVY_POOL, statementMs: HEAVY_STATEMENT_MS, entities: ENTITIES });
+  await Promise.all([source.initialize(), heavySource.initialize()]);
+  await refuseStrongRole(source);
+  // Sessions and the throttle keep their own small pool: signing in must work while the log is busy.
+  const doorPool = new Pool({ connectionString: config.databaseUrl, max: 4, connectionTimeoutMillis: 2_000, application_name: 'loafmark-door' });
+  doorPool.on('error', (error) => logger.warn({ err: error }, 'idle connection lost'));
+
+  const sessionHandler = sessions(config, doorPool);
+  const app = express();
+  app.disable('x-powered-by');
+  app.set('query parser', 'simple');
+  app.set('trust proxy', config.trustedProxies);
+  app.use(requestLog(logger));
+  app.use(...securityHeaders(config.publicUrl));
+  app.use('/api', refuseCrossSite(() => new URL(config.publicUrl).origin));
+  app.use('/api', (request, response, next) => (request.path.startsWith('/health/') ? next() : sessionHandler(request, response, next)));
+  app.use('/api', express.json({ limit: 256 * 1024, strict: true }));
+
+  let stopping = false;
+  const api = new Api(app, source, heavySource);
+  serveFeatures(api, { app, config, source, doorPool, logger, throttle: new Throttle(doorPool), isStopping: () => stopping });
+  app.use('/api', () => {
+    throw notFound('route');
+  });
+  serveClient(app, config.clientDir);
+  app.use(problemHandler);
+
+  return {
+    express: app,
+    api,
+    source,
+    startStopping: () => {
+      stopping = true;
+    },
+    close: async () => {
+      await Promise.all([source.destroy(), heavySource.destroy(), doorPool.end()]);
+    },
+  };
+}

@@ -1,0 +1,31 @@
+import type { Express } from 'express';
+import type { Pool } from 'pg';
+import type { Logger } from 'pino';
+import type { DataSource } from 'typeorm';
+import type { Config } from './config.ts';
+import { healthRoutes } from './features/health/health.routes.ts';
+import { sessionRoutes } from './features/session/session.routes.ts';
+import { suppliersRoutes } from './features/suppliers/suppliers.routes.ts';
+import type { Api } from './http/api.ts';
+import { openApiDocument } from './http/openapi.ts';
+import type { Throttle } from './http/rate-limit.ts';
+
+export interface Surroundings {
+  app: Express;
+  config: Config;
+  source: DataSource;
+  doorPool: Pool;
+  logger: Logger;
+  throttle: Throttle;
+  isStopping: () => boolean;
+}
+
+/** Every feature's routes, one line each. */
+export function serveFeatures(api: Api, around: Surroundings): void {
+  healthRoutes(api, { uploadsDir: around.config.uploadsDir, isStopping: around.isStopping });
+  sessionRoutes(api, around.throttle);
+  suppliersRoutes(api);
+  around.app.get('/api/openapi.json', (_request, response) => {
+    response.json(openApiDocument(api.served, around.config.publicUrl));
+  });
+}
