@@ -1,0 +1,101 @@
+import type { FaultDefinition } from './fault-definition.ts';
+
+export const pourFaults: readonly FaultDefinition[] = [
+  {
+    slug: 'ricing', name: 'Ricing', otherNames: ['rice'],
+    kind: 'cosmetic', worsensTo: 'functional', family: 'pour', firstSeen: 'pour', extentUnit: 'loaf-then-bars',
+    occursIn: { cold: 'usual', hot: 'rare', rebatch: 'never' },
+    definition: 'Hard pale grains, from pinhead to rice size, that appear in the batter when the scent goes in or within two minutes of it. In the cut bar: pale dots or a broken, curd-like look.',
+    severity: { 1: 'Blended out, under 10 dots on a face', 2: 'Dots over the face, still smooth', 3: 'Gritty, weeps, or breaks at the grains' },
+    lookAlikes: [
+      { fault: 'false-trace', name: 'False trace', howToTell: 'Grains are there before the scent and melt when warmed.' },
+      { fault: 'seizing', name: 'Seizing', howToTell: 'The whole mass goes stiff.' },
+      { fault: 'colour-specks', name: 'Undispersed colour', howToTell: 'Coloured points, not pale ones.' },
+    ],
+    suspects: [
+      { input: 'fragranceLot', direction: 'either' }, { input: 'oilTemperatureC', direction: 'down' },
+      { input: 'fragrancePct', direction: 'up' }, { input: 'formula', direction: 'either', which: 'much hard fat' },
+      { input: 'method', direction: 'either', which: 'cold family' },
+    ],
+    prevention: 'Warm the scent or stir it into some warm fat first, lower the load, work warmer, blend briefly; keep such a lot for hot process.',
+    usually: { 1: 'firsts', 2: 'seconds', 3: 'rebatch' },
+    mayHurt: { caution: 'raw', why: 'Grains may hold lye: alkalinity check before anything else.' },
+  },
+  {
+    slug: 'acceleration', name: 'Acceleration', otherNames: ['moving fast'],
+    kind: 'process', family: 'pour', firstSeen: 'pour', extentUnit: 'loaf',
+    occursIn: { cold: 'usual', hot: 'rare', rebatch: 'never' },
+    definition: 'From scent to thick trace in under two minutes, or in less than half the time this formula takes unscented, so that the planned pour or swirl cannot be done.',
+    severity: { 1: 'Thicker, but poured as planned', 2: 'Design lost, spooned in', 3: 'Barely in the mould, pockets left' },
+    lookAlikes: [
+      { fault: 'seizing', name: 'Seizing', howToTell: 'Solid in seconds; this can still be stirred.' },
+      { fault: 'false-trace', name: 'False trace', howToTell: 'Fat setting: goes away with heat.' },
+      { name: 'Over-blending', howToTell: 'Long motor time, and no scent in yet.' },
+    ],
+    suspects: [
+      { input: 'fragranceLot', direction: 'either', which: 'spice, floral, some fixatives' },
+      { input: 'oilTemperatureC', direction: 'up' }, { input: 'lyeTemperatureC', direction: 'up' },
+      { input: 'lyeConcentration', direction: 'up' }, { input: 'waterToLye', direction: 'down' },
+      { input: 'blendSeconds', direction: 'up' }, { input: 'fragrancePct', direction: 'up' },
+      { input: 'formula', direction: 'either', which: 'much hard fat' }, { input: 'additive', direction: 'up', which: 'sugar, beer' },
+    ],
+    prevention: 'Scent last and by whisk, cooler, more water, no stick blender after the scent; or make it hot.',
+    usually: { 1: 'firsts', 2: 'firsts', 3: 'seconds' },
+  },
+  {
+    slug: 'seizing', name: 'Seizing', otherNames: ['soap on a stick'],
+    kind: 'process', worsensTo: 'functional', family: 'pour', firstSeen: 'pour', extentUnit: 'loaf',
+    occursIn: { cold: 'usual', hot: 'rare', rebatch: 'never' },
+    definition: 'Within seconds the batter turns into a stiff mass that cannot be stirred; it may heat up.',
+    severity: { 2: 'Pressed into the mould, finished as a rustic bar', 3: 'Lost, or cooked on as an emergency hot batch' },
+    lookAlikes: [
+      { fault: 'acceleration', name: 'Acceleration', howToTell: 'Thick, but it can still be stirred.' },
+      { name: 'Taffy stage', howToTell: 'Only after a cook.' },
+    ],
+    suspects: [
+      { input: 'fragranceLot', direction: 'either', which: 'clove, cinnamon, some lilac and rose types' },
+      { input: 'oilTemperatureC', direction: 'up' }, { input: 'lyeTemperatureC', direction: 'up' },
+      { input: 'lyeConcentration', direction: 'up' }, { input: 'fragrancePct', direction: 'up' },
+    ],
+    prevention: 'Do not beat it near the face. Cook it on as hot process, or leave it and handle it as caustic.',
+    usually: { 2: 'rebatch', 3: 'discarded' },
+    mayHurt: { caution: 'raw', why: 'Hot and caustic while it is still a lump.' },
+  },
+  {
+    slug: 'separation', name: 'Separation', otherNames: ['weeping', 'oil layer'],
+    kind: 'functional', worsensTo: 'safety', family: 'pour', firstSeen: 'pour', extentUnit: 'loaf-then-bars',
+    occursIn: { cold: 'usual', hot: 'usual', rebatch: 'usual' },
+    definition: 'Free oil or watery liquid on top, in the corners or as a layer below, at pour or when the mould is emptied; the batter looked broken. The last word is at unmoulding.',
+    severity: { 1: 'A few drops, soaked back within a day, alkalinity passes', 2: 'A layer under 2 mm', 3: 'A clear layer, or any alkalinity fail' },
+    lookAlikes: [
+      { fault: 'sweating', name: 'Sweating', howToTell: 'Dew all over, weeks later, comes and goes with the weather.' },
+      { fault: 'overheating-crack', name: 'Weep of an overheated loaf', howToTell: 'After a very hot gel, soaks back in.' },
+    ],
+    suspects: [
+      { input: 'blendSeconds', direction: 'down' }, { input: 'oilTemperatureC', direction: 'down' },
+      { input: 'waterToLye', direction: 'up' }, { input: 'fragranceLot', direction: 'either', which: 'much carrier oil' },
+      { input: 'superfatPct', direction: 'either', which: 'wrong weights; in hot, fat added to an unfinished cook' },
+    ],
+    prevention: 'Blend to a stable trace, warmer, check the weights. A separated loaf goes back into the pot or out.',
+    usually: { 1: 'firsts', 2: 'hold', 3: 'hold' },
+    mayHurt: { caution: 'lye-heavy', why: 'The watery part may be lye: nothing is sold before alkalinity passes.' },
+  },
+  {
+    slug: 'false-trace', name: 'False trace', otherNames: [],
+    kind: 'process', family: 'pour', firstSeen: 'pour', extentUnit: 'loaf',
+    occursIn: { cold: 'usual', hot: 'never', rebatch: 'never' },
+    definition: 'Looks like trace but is fat setting: thick while cool, thin again when warmed or left, with no heat of its own.',
+    severity: { 1: 'Caught, warmed, poured well', 2: 'Poured; specks later', 3: 'Separates' },
+    lookAlikes: [
+      { name: 'True trace', howToTell: 'Stays thick when warmed.' },
+      { fault: 'ricing', name: 'Ricing', howToTell: 'Only after the scent.' },
+    ],
+    suspects: [
+      { input: 'oilTemperatureC', direction: 'down', which: 'below 33 °C with tallow, palm, shea, cocoa butter' },
+      { input: 'lyeTemperatureC', direction: 'down' }, { input: 'blendSeconds', direction: 'down' },
+      { input: 'roomTemperatureC', direction: 'down' }, { input: 'formula', direction: 'either', which: 'hard fats' },
+    ],
+    prevention: 'Fats above 38 °C, lye warm as well, blend until the trail stays.',
+    usually: { 1: 'firsts', 2: 'seconds', 3: 'hold' },
+  },
+];

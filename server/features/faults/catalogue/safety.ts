@@ -1,0 +1,88 @@
+import type { FaultDefinition } from './fault-definition.ts';
+
+export const safetyFaults: readonly FaultDefinition[] = [
+  {
+    slug: 'volcano', name: 'Volcano', otherNames: ['overflow', 'boil-over'],
+    kind: 'safety', family: 'safety', firstSeen: 'pour', extentUnit: 'loaf',
+    occursIn: { cold: 'rare', hot: 'usual', rebatch: 'usual' },
+    definition: 'The mass climbs out of the pot or the mould. Hot and caustic at once.',
+    severity: { 2: 'Caught and stirred down', 3: 'Out of the vessel, or it touched anyone' },
+    lookAlikes: [{ name: 'Foam from stirring', howToTell: 'Falls at once.' }],
+    suspects: [
+      { input: 'additive', direction: 'up', which: 'sugar, honey, milk, beer that was not flat' }, { input: 'method', direction: 'either', which: 'pot more than half full, left alone, high heat' },
+      { input: 'scentTemperatureC', direction: 'up', which: 'light scent into a hot mass' }, { input: 'fragranceLot', direction: 'either', which: 'low flash point' },
+    ],
+    prevention: 'Pot at most half full, stay with it, heat off and stir down; never add water to a rising pot.',
+    usually: { 2: 'firsts', 3: 'discarded' },
+    mayHurt: { caution: 'volcano', why: 'Burns twice: heat and lye.' },
+  },
+  {
+    slug: 'lye-pockets', name: 'Lye pockets', otherNames: ['weeping holes'],
+    kind: 'safety', family: 'safety', firstSeen: 'cut', extentUnit: 'bars',
+    occursIn: { cold: 'usual', hot: 'usual', rebatch: 'usual' },
+    definition: 'Holes or veins that hold clear liquid or white powder and turn strong pink with the indicator drop.',
+    severity: { 3: 'Any lye pocket: gloves on, hold the whole batch' },
+    lookAlikes: [
+      { fault: 'air-pockets', name: 'Air pockets', howToTell: 'Dry.' },
+      { name: 'Oil pocket', howToTell: 'Greasy, stays colourless.' },
+      { name: 'Droplet of water or glycerine', howToTell: 'Stays colourless with the indicator drop.' },
+    ],
+    suspects: [
+      { input: 'blendSeconds', direction: 'down' }, { input: 'lyeTemperatureC', direction: 'down', which: 'cold lye that crystallised' },
+      { input: 'superfatPct', direction: 'down', which: 'weighing slip' }, { input: 'lyeConcentration', direction: 'up', which: 'undissolved beads' },
+      { input: 'fragranceLot', direction: 'either', which: 'scents that seize' },
+    ],
+    prevention: 'Dissolve fully, strain the lye, blend to a stable trace.',
+    usually: { 3: 'hold' },
+    mayHurt: { caution: 'lye-heavy', why: 'Free lye burns skin and blinds eyes. Never sold.' },
+  },
+  {
+    slug: 'lye-heavy', name: 'Lye heavy', otherNames: ['zaps', 'excess lye'],
+    kind: 'safety', family: 'safety', firstSeen: 'unmould', extentUnit: 'tested-bars',
+    occursIn: { cold: 'usual', hot: 'usual', rebatch: 'usual' },
+    definition: 'Fails the workshop’s alkalinity check: zap, strong pink drop, or pH above the limit after the stated days; often hard and chalky, with cracks. A fresh cold loaf may fail and be fine a week later.',
+    severity: { 2: 'Fails within its first week: test again', 3: 'Fails after the first week, or at release' },
+    lookAlikes: [
+      { name: 'Fresh soap', howToTell: 'Passes later.' },
+      { fault: 'soda-ash', name: 'Soda ash', howToTell: 'Only the surface.' },
+    ],
+    suspects: [
+      { input: 'superfatPct', direction: 'down', which: 'below 0 as weighed' }, { input: 'alkaliLot', direction: 'either', which: 'purity entered too low' },
+      { input: 'fatLot', direction: 'either', which: 'wrong fat, or one left out' }, { input: 'cookMinutes', direction: 'down', which: 'cook not finished' },
+      { input: 'maker', direction: 'either' },
+    ],
+    prevention: 'Red stop at weighing, a second person checks the alkali; rebatch with computed fat.',
+    usually: { 2: 'hold', 3: 'hold' },
+    mayHurt: { caution: 'lye-heavy', why: 'Burns skin. Held until an owner decides.' },
+  },
+  {
+    slug: 'foreign-matter', name: 'Foreign matter', otherNames: ['hair', 'grit', 'packaging bits'],
+    kind: 'safety', family: 'safety', firstSeen: 'pour', extentUnit: 'loaf-then-bars',
+    occursIn: { cold: 'usual', hot: 'usual', rebatch: 'usual' },
+    definition: 'Anything in or on the soap that is not in the formula.',
+    severity: { 2: 'Loose on the surface, taken off before sale', 3: 'In or on a bar that leaves; glass, metal, insect, hair' },
+    lookAlikes: [{ name: 'Oats, petals', howToTell: 'Meant to be there.' }],
+    suspects: [
+      { input: 'maker', direction: 'either', which: 'hair net, jewellery' }, { input: 'cover', direction: 'down', which: 'covered racks' },
+      { input: 'additive', direction: 'up', which: 'packaging bits' },
+    ],
+    prevention: 'Cover, sieve, check the tools. Glass: discard everything that stood open.',
+    usually: { 2: 'firsts', 3: 'discarded' },
+    mayHurt: { caution: 'raw', why: 'Glass and metal cut: hold the batch.' },
+  },
+  {
+    slug: 'customer-reaction', name: 'Skin or eye reaction', otherNames: ['customer reaction'],
+    kind: 'safety', family: 'safety', firstSeen: 'in-use', extentUnit: 'bars',
+    occursIn: { cold: 'usual', hot: 'usual', rebatch: 'usual' },
+    definition: 'Somebody reports that skin or eyes reacted. Written down in their words, without a diagnosis; always a matter of safety.',
+    severity: { 3: 'Any report: stop selling, tell the owner today' },
+    lookAlikes: [{ fault: 'lye-heavy', name: 'Lye heavy', howToTell: 'Check the kept bars of the batch for alkali.' }],
+    suspects: [
+      { input: 'fragranceLot', direction: 'either' }, { input: 'fragrancePct', direction: 'up' }, { input: 'superfatPct', direction: 'down' },
+      { input: 'colourantLot', direction: 'either' },
+    ],
+    prevention: 'Loads within the maximum for rinse-off soap, allergens named on the label, alkalinity checked before release.',
+    usually: { 3: 'hold' },
+    mayHurt: { caution: 'reaction', why: 'Others may have bars of the same batch.' },
+  },
+];
