@@ -1,6 +1,19 @@
 import type { EntityTarget, ObjectLiteral } from 'typeorm';
+import { Formula, FormulaLine, FormulaVersion } from './features/formulas/formula.entity.ts';
+import { LotStandingChangeRow } from './features/lots/lot-standing-change.entity.ts';
+import { Lot } from './features/lots/lot.entity.ts';
+import { Material } from './features/materials/material.entity.ts';
 import { Account } from './features/session/account.entity.ts';
 import { Supplier } from './features/suppliers/supplier.entity.ts';
 
 /** Every entity; TypeORM takes classes, not globs. */
-export const ENTITIES: EntityTarget<ObjectLiteral>[] = [Account, Supplier];
+export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
+  Account,
+  Formula,
+  FormulaLine,
+  FormulaVersion,
+  Lot,
+  LotStandingChangeRow,
+  Material,
+  Supplier,
+];

@@ -3,7 +3,10 @@ import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
+import { formulasRoutes } from './features/formulas/formulas.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
+import { lotsRoutes } from './features/lots/lots.routes.ts';
+import { materialsRoutes } from './features/materials/materials.routes.ts';
 import { sessionRoutes } from './features/session/session.routes.ts';
 import { suppliersRoutes } from './features/suppliers/suppliers.routes.ts';
 import type { Api } from './http/api.ts';
@@ -25,6 +28,9 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   healthRoutes(api, { uploadsDir: around.config.uploadsDir, isStopping: around.isStopping });
   sessionRoutes(api, around.throttle);
   suppliersRoutes(api);
+  materialsRoutes(api);
+  lotsRoutes(api);
+  formulasRoutes(api);
   around.app.get('/api/openapi.json', (_request, response) => {
     response.json(openApiDocument(api.served, around.config.publicUrl));
   });
