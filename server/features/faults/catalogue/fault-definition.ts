@@ -1,10 +1,8 @@
+import type { FAULT_FAMILIES, FAULT_KINDS } from '#shared/faults.ts';
 import type { Stage } from '#shared/words/stages.ts';
 
-export const FAULT_KINDS = ['cosmetic', 'functional', 'process', 'safety'] as const;
 export type FaultKind = (typeof FAULT_KINDS)[number];
-
 /** Families share one outline on screen and in print. */
-export const FAULT_FAMILIES = ['surface', 'structure', 'pour', 'colour', 'scent', 'safety'] as const;
 export type FaultFamily = (typeof FAULT_FAMILIES)[number];
 
 /** How ordinary a fault is in a family of methods; `never` keeps it off that family's checklist. */
