@@ -64,7 +64,7 @@ export function drawInspections(batch: LookedAt): HistoryInspection[] {
 
 /** Looks that show what the story depends on are never missed. */
 function mustLook(batch: LookedAt, stage: Stage): boolean {
-  return [...batch.settled].some((fault) => catalogueFault(fault).firstSeen === stage || (fault === 'lye-heavy' && stage === 'cut'));
+  return [...batch.settled].some((fault) => catalogueFault(fault).firstSeen === stage || (fault === 'lye-heavy' && (stage === 'cut' || stage === 'cure-w1')));
 }
 
 function whenLooked(batch: LookedAt, look: { stage: Stage; from: string; to: string }, r: ReturnType<typeof randomOf>): { day: string; minutes?: number; inspector: string } {
