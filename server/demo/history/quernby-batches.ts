@@ -55,8 +55,8 @@ interface Draft { slot: Slot; code: string; pin: Pin | undefined; inputs: BatchI
 function complete(draft: Draft, seed: number, today: string, timeZone: string): HistoryBatch {
   const { slot, code, pin } = draft;
   const truth = drawTruth(seed, code, draft.inputs, pin);
-  const inputs = { ...draft.inputs, ...tracesOf(seed, code, draft.inputs, truth) };
-  const times = timesOf(randomOf(seed, 'times', code), slot.madeOn, inputs);
+  const times = timesOf(randomOf(seed, 'times', code), slot.madeOn, draft.inputs);
+  const inputs = { ...draft.inputs, mouldHours: times.mouldHours, ...tracesOf(seed, code, draft.inputs, truth) };
   const lastStage = pin?.part ? endedAt[pin.part] : undefined;
   const cureWeeks = quernbyFormulas.find((f) => f.key === inputs.formula)?.cureWeeks;
   const inspections = drawInspections({

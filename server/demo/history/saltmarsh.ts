@@ -35,8 +35,8 @@ function batchOf(n: number, madeOn: string, today: string): HistoryBatch {
   const code = `SK-${String(n + 1).padStart(4, '0')}`;
   const drawn = saltmarshInputs(seed, n, code, madeOn);
   const truth = drawTruth(seed, code, drawn, undefined);
-  const inputs = { ...drawn, ...tracesOf(seed, code, drawn, truth) };
-  const times = timesOf(randomOf(seed, 'times', code), madeOn, inputs);
+  const times = timesOf(randomOf(seed, 'times', code), madeOn, drawn);
+  const inputs = { ...drawn, mouldHours: times.mouldHours, ...tracesOf(seed, code, drawn, truth) };
   const byName = (key: string) => (key === 'benedikt' || key === 'noor' || key === 'ilse' ? 'maren' : key);
   const inspections = drawInspections({ seed, code, madeOn, times, inputs, truth, today, timeZone, settled: new Set() })
     .map((look) => ({ ...look, inspector: byName(look.inspector) }));

@@ -6,11 +6,12 @@ const openAt = 7 * 60;
 const closeAt = 20 * 60;
 
 /** Days and minutes on the workshop's clock at which a batch was poured, unmoulded and cut. */
-export interface BatchTimes { pourMinutes: number; unmouldedOn: string; unmouldMinutes: number; cutOn: string; cutMinutes: number }
+export interface BatchTimes { pourMinutes: number; unmouldedOn: string; unmouldMinutes: number; mouldHours: number; cutOn: string; cutMinutes: number }
 
 /**
  * Chooses the time of the pour so that the cut falls into hours at which
  * somebody is there; the hours between the two are an input and stay as drawn.
+ * A loaf that would leave its mould at night leaves it just before the cut.
  */
 export function timesOf(r: Random, madeOn: string, inputs: Pick<BatchInputs, 'cutHours' | 'mouldHours'>): BatchTimes {
   const wait = Math.round(inputs.cutHours * 60);
@@ -22,10 +23,12 @@ export function timesOf(r: Random, madeOn: string, inputs: Pick<BatchInputs, 'cu
   };
   const pourMinutes = tries.reduce((best, minutes) => (late(minutes) < late(best) ? minutes : best));
   const cut = pourMinutes + wait;
-  const unmould = pourMinutes + Math.round(inputs.mouldHours * 60);
+  const wished = pourMinutes + Math.round(inputs.mouldHours * 60);
+  const atNight = wished % 1440 < openAt || wished % 1440 > closeAt;
+  const unmould = atNight ? cut - r.whole(15, 45) : wished;
   return {
     pourMinutes, cutOn: addDays(madeOn, Math.floor(cut / 1440)), cutMinutes: cut % 1440,
-    unmouldedOn: addDays(madeOn, Math.floor(unmould / 1440)), unmouldMinutes: unmould % 1440,
+    unmouldedOn: addDays(madeOn, Math.floor(unmould / 1440)), unmouldMinutes: unmould % 1440, mouldHours: Number(((unmould - pourMinutes) / 60).toFixed(1)),
   };
 }
 
