@@ -1,5 +1,6 @@
 import type { EntityTarget, ObjectLiteral } from 'typeorm';
 import { Formula, FormulaLine, FormulaVersion } from './features/formulas/formula.entity.ts';
+import { Import } from './features/imports/import.entity.ts';
 import { LotStandingChangeRow } from './features/lots/lot-standing-change.entity.ts';
 import { Lot } from './features/lots/lot.entity.ts';
 import { Material } from './features/materials/material.entity.ts';
@@ -12,6 +13,7 @@ export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   Formula,
   FormulaLine,
   FormulaVersion,
+  Import,
   Lot,
   LotStandingChangeRow,
   Material,

@@ -5,6 +5,7 @@ import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
 import { formulasRoutes } from './features/formulas/formulas.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
+import { importsRoutes } from './features/imports/imports.routes.ts';
 import { lotsRoutes } from './features/lots/lots.routes.ts';
 import { materialsRoutes } from './features/materials/materials.routes.ts';
 import { sessionRoutes } from './features/session/session.routes.ts';
@@ -31,6 +32,7 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   materialsRoutes(api);
   lotsRoutes(api);
   formulasRoutes(api);
+  importsRoutes(api);
   around.app.get('/api/openapi.json', (_request, response) => {
     response.json(openApiDocument(api.served, around.config.publicUrl));
   });

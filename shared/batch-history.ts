@@ -41,3 +41,6 @@ export function faultOfColumn(head: string): string | undefined {
 
 /** Several lots or colourants in one cell stand apart by a semicolon. */
 export const LIST_SEPARATOR = ';';
+
+/** Methods as the sheet writes them. */
+export const METHOD_IN_HISTORY = { cold: 'cold', 'cold-oven': 'cold, oven-gelled', hot: 'hot', 'hot-fluid': 'hot, fluid', rebatch: 'rebatch' } as const;

@@ -22,6 +22,9 @@ interface Asked<P extends AnySchema, Q extends AnySchema, B extends AnySchema> {
 
 type ReplyInput<R extends AnySchema> = R extends z.ZodType ? z.input<R> : void;
 
+/** Runs one step in a transaction of the acting member's workshop. */
+export type Work = <T>(step: (tx: WorkshopTransaction) => Promise<T>) => Promise<T>;
+
 /** What a `creates` handler answers: the record, and whether an earlier try had made it already. */
 export interface Created<View> {
   view: View;
@@ -116,14 +119,31 @@ export class Api {
   upload<P extends AnySchema, Q extends AnySchema, R extends AnySchema>(
     entry: Endpoint<P, Q, AnySchema, R>,
     takeIn: RequestHandler,
-    handler: (asked: Asked<P, Q, undefined> & { work: <T>(work: (tx: WorkshopTransaction) => Promise<T>) => Promise<T>; response: Response }) => Promise<ReplyInput<R>>,
+    handler: (asked: Asked<P, Q, undefined> & { work: Work; response: Response }) => Promise<ReplyInput<R>>,
   ): void {
     this.route(entry, async (request, response, now) => {
       const member = await this.signedIn(request, entry, now);
       const asked = parseAsked({ ...entry, body: undefined }, request);
       await new Promise<void>((resolve, reject) => takeIn(request, response, (error?: unknown) => (error ? reject(error as Error) : resolve())));
-      const work = <T>(step: (tx: WorkshopTransaction) => Promise<T>) => this.inWorkshopFor(entry, member, request, now, step);
+      const work: Work = (step) => this.inWorkshopFor(entry, member, request, now, step);
       send(entry, response, await handler({ ...asked, work, response } as never));
+    });
+  }
+
+  /**
+   * Serves an entry that works in several transactions of its own. `aside` takes a connection of the
+   * ordinary pool, e.g. to show how far the work has come, and so never waits for `work` itself.
+   */
+  steps<P extends AnySchema, Q extends AnySchema, B extends AnySchema, R extends AnySchema>(
+    entry: Endpoint<P, Q, B, R>,
+    handler: (asked: Asked<P, Q, B> & { work: Work; aside: Work }) => Promise<ReplyInput<R>>,
+  ): void {
+    this.route(entry, async (request, response, now) => {
+      const member = await this.signedIn(request, entry, now);
+      const asked = parseAsked(entry, request);
+      const work: Work = (step) => this.inWorkshopFor(entry, member, request, now, step);
+      const aside: Work = (step) => this.inWorkshopFor({ ...entry, heavy: false }, member, request, now, step);
+      send(entry, response, await handler({ ...asked, work, aside } as never));
     });
   }
 

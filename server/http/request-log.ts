@@ -1,7 +1,18 @@
 import { randomUUID } from 'node:crypto';
+import type { IncomingMessage, ServerResponse } from 'node:http';
 import type { RequestHandler } from 'express';
 import type { Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
+
+/** An error without the statement and the values it was about: those may be formulas or addresses. */
+function plainError(error: Error): object {
+  return { type: error.name, message: error.message, stack: error.stack };
+}
+
+function requestLine(request: IncomingMessage, response: ServerResponse): object {
+  const { route } = (response as ServerResponse & { locals?: { route?: string } }).locals ?? {};
+  return { method: request.method, route: route ?? 'none', status: response.statusCode };
+}
 
 /** One line a request: method, route template, status, milliseconds, request id. Never bodies, addresses, tokens or URLs. */
 export function requestLog(logger: Logger): RequestHandler {
@@ -9,12 +20,9 @@ export function requestLog(logger: Logger): RequestHandler {
     logger,
     genReqId: () => randomUUID(),
     quietReqLogger: true,
-    serializers: { req: () => undefined, res: () => undefined },
-    customProps: (request, response) => ({
-      method: request.method,
-      route: (response as unknown as { locals?: Record<string, unknown> }).locals?.['route'] ?? 'static',
-      status: response.statusCode,
-    }),
+    serializers: { req: () => undefined, res: () => undefined, err: plainError },
+    customSuccessObject: (request, response, line: object) => ({ ...line, ...requestLine(request, response) }),
+    customErrorObject: (request, response, _error, line: object) => ({ ...line, err: undefined, ...requestLine(request, response) }),
     customLogLevel: (_request, response, error) => (error || response.statusCode >= 500 ? 'error' : 'info'),
     customSuccessMessage: () => 'request',
     customErrorMessage: () => 'request',

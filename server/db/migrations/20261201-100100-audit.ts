@@ -29,27 +29,36 @@ export class Audit20261201100100 implements MigrationInterface {
       create trigger audit_entry_is_never_emptied before truncate on audit_entry
         for each statement execute function app.refuse_change();
 
+      -- One insert a statement, not one a row: an import writes a hundred thousand rows.
       -- Secrets never reach the trail; what did not change is not repeated.
       create function app.write_audit() returns trigger language plpgsql as $$
       declare
         hidden text[] := array['password_hash', 'token_hash', 'created_from', 'content'];
-        was jsonb := case when tg_op = 'INSERT' then null else to_jsonb(old) - hidden end;
-        is_now jsonb := case when tg_op = 'DELETE' then null else to_jsonb(new) - hidden end;
-        row_now jsonb := coalesce(is_now, was);
+        who uuid := nullif(current_setting('app.member_id', true), '')::uuid;
+        request text := nullif(current_setting('app.request_id', true), '');
       begin
-        if tg_op = 'UPDATE' and (was - 'updated_at') = (is_now - 'updated_at') then return null; end if;
-        insert into audit_entry (workshop_id, member_id, request_id, deed, table_name, record_id, before, after)
-        values (
-          coalesce((row_now ->> 'workshop_id')::uuid, (row_now ->> 'id')::uuid),
-          nullif(current_setting('app.member_id', true), '')::uuid,
-          nullif(current_setting('app.request_id', true), ''),
-          lower(tg_op), tg_table_name, (row_now ->> 'id')::uuid, was, is_now);
+        if tg_op = 'INSERT' then
+          insert into audit_entry (workshop_id, member_id, request_id, deed, table_name, record_id, after)
+          select coalesce(r ->> 'workshop_id', r ->> 'id')::uuid, who, request, 'insert', tg_table_name, (r ->> 'id')::uuid, r - hidden
+          from (select to_jsonb(n) r from new_rows n) fresh;
+        elsif tg_op = 'UPDATE' then
+          insert into audit_entry (workshop_id, member_id, request_id, deed, table_name, record_id, before, after)
+          select coalesce(r ->> 'workshop_id', r ->> 'id')::uuid, who, request, 'update', tg_table_name, (r ->> 'id')::uuid, was - hidden, r - hidden
+          from (select to_jsonb(o) was, to_jsonb(n) r from old_rows o join new_rows n using (id)) changed
+          where was - hidden - array['updated_at'] <> r - hidden - array['updated_at'];
+        else
+          insert into audit_entry (workshop_id, member_id, request_id, deed, table_name, record_id, before)
+          select coalesce(r ->> 'workshop_id', r ->> 'id')::uuid, who, request, 'delete', tg_table_name, (r ->> 'id')::uuid, r - hidden
+          from (select to_jsonb(o) r from old_rows o) gone;
+        end if;
         return null;
       end $$;
 
       create procedure app.keep_trail(relation regclass) language plpgsql as $$
       begin
-        execute format('create trigger trail after insert or update or delete on %s for each row execute function app.write_audit()', relation);
+        execute format('create trigger trail_insert after insert on %s referencing new table as new_rows for each statement execute function app.write_audit()', relation);
+        execute format('create trigger trail_update after update on %s referencing old table as old_rows new table as new_rows for each statement execute function app.write_audit()', relation);
+        execute format('create trigger trail_delete after delete on %s referencing old table as old_rows for each statement execute function app.write_audit()', relation);
       end $$;
       call app.keep_trail('workshop');
       call app.keep_trail('member');

@@ -265,24 +265,32 @@ export class Batches20261201100300 implements MigrationInterface {
       create index batch_outcome_found on batch_outcome using gin (found);
       create index batch_outcome_checked on batch_outcome using gin (checked);
 
+      -- Looks up one batch at a time, and is planned anew each time: a join, or a plan kept from an empty
+      -- workshop, is quadratic inside a large import, where no statistics are to be had yet.
       create function app.keep_outcomes() returns trigger language plpgsql as $$
       begin
+        execute $statement$
         insert into batch_outcome (workshop_id, batch_id, outcomes, found, checked, worst)
         select w, b, coalesce(jsonb_object_agg(fault, worst order by fault) filter (where fault is not null), '{}'),
           coalesce(array_agg(fault order by fault) filter (where worst > 0), '{}'),
           coalesce(array_agg(fault order by fault) filter (where fault is not null), '{}'),
           coalesce(max(worst), 0)
         from (
-          select t.workshop_id w, t.batch_id b, a.fault,
-            max(case when a.answer = 'found' then coalesce(f.severity, 1) else 0 end) worst
+          select t.workshop_id w, t.batch_id b, a.fault, max(a.severity) worst
           from (select distinct workshop_id, batch_id from touched) t
-          left join checklist_answer a on a.workshop_id = t.workshop_id and a.batch_id = t.batch_id and a.answer <> 'not-checked'
-          left join finding f on f.workshop_id = a.workshop_id and f.inspection_id = a.inspection_id and f.fault = a.fault and f.withdrawn_at is null
+          left join lateral (
+            select c.fault, case when c.answer = 'clear' then 0 else coalesce((
+              select f.severity from finding f
+              where f.workshop_id = c.workshop_id and f.inspection_id = c.inspection_id and f.fault = c.fault and f.withdrawn_at is null), 1) end severity
+            from checklist_answer c
+            where c.workshop_id = t.workshop_id and c.batch_id = t.batch_id and c.answer <> 'not-checked' offset 0
+          ) a on true
           group by 1, 2, 3
         ) per_fault
         group by w, b
         on conflict (workshop_id, batch_id) do update
-          set outcomes = excluded.outcomes, found = excluded.found, checked = excluded.checked, worst = excluded.worst;
+          set outcomes = excluded.outcomes, found = excluded.found, checked = excluded.checked, worst = excluded.worst
+        $statement$;
         return null;
       end $$;
       create procedure app.keep_outcomes_of(relation regclass) language plpgsql as $$
