@@ -43,7 +43,7 @@ interface Step {
   /** Input that lies in between. */
   through: string;
   from: readonly string[];
-  to: readonly string[];
+  to: readonly string[] | 'any';
 }
 
 /**
@@ -53,6 +53,9 @@ interface Step {
  * Source: common practice for the links.
  */
 const STEPS: readonly Step[] = [
+  // How warm, how wet and how long follows from hot or cold: it is what the method does.
+  ...['oilTemperatureC', 'lyeTemperatureC', 'scentTemperatureC', 'waterToLye', 'lyeConcentration', 'blendSeconds', 'cookMinutes', 'mouldHours', 'cutHours', 'gel', 'cover', 'trace']
+    .map((through): Step => ({ through, from: ['method', 'methodFamily'], to: 'any' })),
   {
     through: 'gel',
     from: ['method', 'methodFamily', 'cover', 'mould', 'season', 'roomTemperatureC', 'humidityPct', 'oilTemperatureC', 'lyeTemperatureC', 'waterToLye', 'lyeConcentration', 'maker', 'formula', 'liquid', 'additive', 'fragranceLot'],
@@ -79,7 +82,7 @@ const STEPS: readonly Step[] = [
 
 /** Whether `between` lies on the way from the input to the fault. */
 export function onThePath(between: string, input: string, fault: string): boolean {
-  return STEPS.some((step) => step.through === between && step.from.includes(input) && step.to.includes(fault));
+  return STEPS.some((step) => step.through === between && step.from.includes(input) && (step.to === 'any' || step.to.includes(fault)));
 }
 
 /** Come about during the making; nobody sets them, so they may carry the effect of what was set before. */
@@ -94,6 +97,8 @@ export function arisesByItself(input: string): boolean {
 const SAME_QUANTITY: readonly (readonly string[])[] = [
   ['waterToLye', 'lyeConcentration'],
   ['method', 'methodFamily'],
+  // How much vanillin there is, is a property of the lot.
+  ['vanillinPct', 'fragranceLot'],
 ];
 
 /** Whether two inputs are one quantity written twice, so that one cannot be held still while the other moves. */

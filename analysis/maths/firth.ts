@@ -29,6 +29,8 @@ export interface FirthOptions {
   /** Hold this term at the value it has in `start`. */
   fixed?: number;
   maxIterations?: number;
+  /** Largest step at which it has arrived; 1e-8 when absent. */
+  tolerance?: number;
 }
 
 const TOLERANCE = 1e-8;
@@ -125,7 +127,7 @@ function newtonStep(design: Design, bench: Bench, fixed: number | undefined): Fl
  */
 export function firthFit(design: Design, options: FirthOptions = {}): FirthFit | null {
   const { terms: p, groups } = design;
-  const { fixed, maxIterations = 100 } = options;
+  const { fixed, maxIterations = 100, tolerance = TOLERANCE } = options;
   const bench: Bench = {
     information: new Float64Array(p * p), score: new Float64Array(p),
     expected: new Float64Array(groups), working: new Float64Array(groups), row: new Float64Array(p),
@@ -156,7 +158,7 @@ export function firthFit(design: Design, options: FirthOptions = {}): FirthFit |
     }
     beta = moved.beta;
     value = moved.value;
-    converged = largest < TOLERANCE;
+    converged = largest < tolerance;
   }
   return { beta, penalisedLogLikelihood: value, factor: bench.information, converged, iterations };
 }

@@ -2,6 +2,9 @@ import { CHI2_95, chisquareUpper, normalUpper } from './distributions.ts';
 import { firthFit, standardError } from './firth.ts';
 import type { Design, FirthFit } from './firth.ts';
 
+/** Of a held fit only the likelihood is used, whose error is the square of the step's. */
+const HELD = 1e-4;
+
 /** Whether a term matters, by the penalised likelihood ratio. */
 export interface RatioTest {
   /** Twice the drop in penalised log-likelihood when the term is held at 0; chi-square, 1 df. */
@@ -22,7 +25,7 @@ export interface RatioTest {
 export function ratioTest(design: Design, fit: FirthFit, term: number): RatioTest | null {
   const start = Float64Array.from(fit.beta);
   start[term] = 0;
-  const held = firthFit(design, { start, fixed: term });
+  const held = firthFit(design, { start, fixed: term, tolerance: HELD });
   if (held === null) return null;
   const statistic = Math.max(0, 2 * (fit.penalisedLogLikelihood - held.penalisedLogLikelihood));
   const root = Math.sqrt(statistic) * Math.sign(fit.beta[term]!);
@@ -39,7 +42,7 @@ export interface TermInterval {
 function excess(design: Design, fit: FirthFit, term: number, at: number, near: Float64Array): { value: number; beta: Float64Array } | null {
   const start = Float64Array.from(near);
   start[term] = at;
-  const held = firthFit(design, { start, fixed: term });
+  const held = firthFit(design, { start, fixed: term, tolerance: HELD });
   if (held === null) return null;
   return { value: 2 * (fit.penalisedLogLikelihood - held.penalisedLogLikelihood) - CHI2_95, beta: held.beta };
 }

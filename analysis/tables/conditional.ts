@@ -65,11 +65,29 @@ const REACH = 40;
 function passes(rising: (t: number) => number, target: number): number {
   let low = -REACH;
   let high = REACH;
-  while (high - low > 1e-11) {
+  while (high - low > 2) {
     const middle = (low + high) / 2;
-    if (middle === low || middle === high) break;
     if (rising(middle) < target) low = middle;
     else high = middle;
+  }
+  // Illinois' false position: the curve is nearly straight by now.
+  let [below, over] = [rising(low) - target, rising(high) - target];
+  let side = 0;
+  for (let round = 0; round < 60 && high - low > 1e-10; round++) {
+    const at = below === over ? (low + high) / 2 : (low * over - high * below) / (over - below);
+    const value = rising(at) - target;
+    if (Math.abs(value) < 1e-13) return at;
+    if (value < 0) {
+      low = at;
+      below = value;
+      if (side === -1) over /= 2;
+      side = -1;
+    } else {
+      high = at;
+      over = value;
+      if (side === 1) below /= 2;
+      side = 1;
+    }
   }
   return (low + high) / 2;
 }
