@@ -1,0 +1,39 @@
+import type { QueryClient } from '@tanstack/react-query';
+import { createBrowserRouter, redirect, type LoaderFunctionArgs } from 'react-router-dom';
+import { sessionQuery } from '#src/features/session/session.queries.ts';
+import { CallProblem } from '#src/lib/call.ts';
+import { paths } from './paths.ts';
+import { ScreenError } from './ScreenError.tsx';
+import { Shell } from './Shell.tsx';
+
+/** Leads whoever is not signed in to the door, and back afterwards. */
+function guard(client: QueryClient) {
+  return async ({ request }: LoaderFunctionArgs) => {
+    try {
+      return await client.ensureQueryData(sessionQuery);
+    } catch (error) {
+      if (!(error instanceof CallProblem) || error.status !== 401) throw error;
+      const { pathname, search } = new URL(request.url);
+      throw redirect(pathname === '/' ? paths.signIn : `${paths.signIn}?back=${encodeURIComponent(pathname + search)}`);
+    }
+  };
+}
+
+/** Data routes, each screen in its own file. */
+export function makeRouter(client: QueryClient) {
+  return createBrowserRouter([
+    {
+      loader: guard(client),
+      element: <Shell />,
+      errorElement: <ScreenError />,
+      HydrateFallback: () => null,
+      children: [
+        {
+          errorElement: <ScreenError />,
+          children: [{ path: paths.pieces, lazy: () => import('./screens/PiecesScreen.tsx') }],
+        },
+      ],
+    },
+    { path: paths.signIn, errorElement: <ScreenError />, HydrateFallback: () => null, lazy: () => import('./screens/SignInScreen.tsx') },
+  ]);
+}
