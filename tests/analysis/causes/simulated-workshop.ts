@@ -5,8 +5,8 @@ import { normalDraw, randomFrom, shuffled } from '#analysis/maths/random.ts';
 /**
  * An invented workshop with known truth: three makers with habits, ten fragrance
  * lots of which one is bad in cold batches (and mostly in the hands of one maker),
- * water that brings ash, hot batches that bring air pockets, a lot that is only
- * ever used by the maker with much water (innocent), and answers missing at random.
+ * water that brings ash, hot batches that bring air pockets, a lot that is mostly
+ * poured, and only cold, by the maker with much water (innocent), and answers missing at random.
  */
 export const inputs: readonly InputSpec[] = [
   { slug: 'methodFamily', kind: 'nominal', class: 'other', knownAt: 'plan' },
@@ -75,8 +75,8 @@ interface Made { row: BatchRow; chances: Record<string, number>; skips: number }
 function makeBatch(random: Random, index: number, batches: number): Made {
   const hot = random.next() < 0.3;
   const drawnMaker = hot ? pick(random, [['priya', 0.76], ['ilse', 0.14], ['tomasz', 0.1]]) : pick(random, [['ilse', 0.45], ['tomasz', 0.48], ['priya', 0.07]]);
-  const lot = pick(random, [[BAD_LOT, 0.09], [INNOCENT_LOT, 0.09], ...Array.from({ length: 8 }, (_, i) => [`lot-${i}`, 0.1] as const)]);
-  const maker = !hot && (lot === BAD_LOT || lot === INNOCENT_LOT) && random.next() < 0.75 ? 'tomasz' : drawnMaker;
+  const lot = pick(random, [[BAD_LOT, 0.09], [INNOCENT_LOT, hot ? 0 : 0.16], ...Array.from({ length: 8 }, (_, i) => [`lot-${i}`, 0.1] as const)]);
+  const maker = !hot && (lot === BAD_LOT || lot === INNOCENT_LOT) && random.next() < (lot === BAD_LOT ? 0.6 : 0.8) ? 'tomasz' : drawnMaker;
   const method = hot ? (random.next() < 0.3 ? 'hot-fluid' : 'hot') : random.next() < (maker === 'tomasz' ? 0.24 : 0.15) ? 'cold-oven' : 'cold';
   const formula = pick(random, [['everyday', 0.3], ['kitchen', 0.15], ['milk', 0.12], ['olive', 0.15], ['charcoal', 0.18], ['hotel', 0.1]]);
   const day = (index / batches) * 730;
