@@ -1,4 +1,7 @@
 import type { EntityTarget, ObjectLiteral } from 'typeorm';
+import { Batch } from './features/batches/batch.entity.ts';
+import { BatchIngredient, CookStageRow } from './features/batches/ingredient.entity.ts';
+import { MouldRecord } from './features/batches/mould.entity.ts';
 import { Formula, FormulaLine, FormulaVersion } from './features/formulas/formula.entity.ts';
 import { Import } from './features/imports/import.entity.ts';
 import { LotStandingChangeRow } from './features/lots/lot-standing-change.entity.ts';
@@ -10,6 +13,9 @@ import { Supplier } from './features/suppliers/supplier.entity.ts';
 /** Every entity; TypeORM takes classes, not globs. */
 export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   Account,
+  Batch,
+  BatchIngredient,
+  CookStageRow,
   Formula,
   FormulaLine,
   FormulaVersion,
@@ -17,5 +23,6 @@ export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   Lot,
   LotStandingChangeRow,
   Material,
+  MouldRecord,
   Supplier,
 ];

@@ -3,6 +3,8 @@ import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
+import { batchesRoutes } from './features/batches/batches.routes.ts';
+import { exportsRoutes } from './features/exports/exports.routes.ts';
 import { formulasRoutes } from './features/formulas/formulas.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
 import { importsRoutes } from './features/imports/imports.routes.ts';
@@ -33,6 +35,8 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   lotsRoutes(api);
   formulasRoutes(api);
   importsRoutes(api);
+  batchesRoutes(api);
+  exportsRoutes(api);
   around.app.get('/api/openapi.json', (_request, response) => {
     response.json(openApiDocument(api.served, around.config.publicUrl));
   });

@@ -13,6 +13,7 @@ export const IngredientWish = z.strictObject({
 export type IngredientWish = z.infer<typeof IngredientWish>;
 
 export const CookStageWish = z.strictObject({ stage: CookStage, minutesFromStart: z.number().min(0).max(720, 'Minutes must lie between 0 and 720') });
+export type CookStageWish = z.infer<typeof CookStageWish>;
 
 /**
  * What can be known of a making. The limits are the hard ones: outside them the number is a slip

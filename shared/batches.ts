@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { batchFields } from './batch-fields.ts';
 import { endpoint } from './http/endpoint.ts';
-import { changeOf, day, id, recordFields, text } from './http/fields.ts';
+import { changeOf, count, day, id, optionalMeasure, recordFields, text } from './http/fields.ts';
 import { pageOf, pageQuery } from './http/page.ts';
 import { BatchState, CookStage, Cover, DispositionKind, Gel, Palette, Trace } from './words/batch-words.ts';
 import { FaultSlug, Severity } from './words/fault-words.ts';
@@ -82,7 +82,6 @@ const batchView = {
   mouldId: z.string().nullable(),
   mouldName: z.string().nullable(),
   bars: z.int().nullable(),
-  oilMassG: z.number().nullable(),
   waterToLye: z.number().nullable(),
   lyeConcentrationFraction: z.number().nullable(),
   superfatFraction: z.number().nullable(),
@@ -122,12 +121,13 @@ const batchView = {
 /** For those who may read formula quantities: masses and shares beside each ingredient. */
 export const BatchView = z.object({
   ...batchView,
+  oilMassG: z.number().nullable(),
   ingredients: z.array(Ingredient.extend({ massG: z.number().nullable(), shareOfOilsFraction: z.number().nullable() })),
   seesQuantities: z.literal(true),
 });
 export type BatchView = z.infer<typeof BatchView>;
 
-/** For the others: the fragrances' loads only (they are on the claim), no grams, no shares of fats. */
+/** For the others: the fragrances' load in all (it is on the claim), no grams, no shares. */
 export const BatchOutline = z.object({
   ...batchView,
   ingredients: z.array(Ingredient),
@@ -168,16 +168,26 @@ export type BatchesFilterInput = z.input<typeof BatchesFilter>;
 
 export const Mould = z.object({ ...recordFields, name: z.string(), oilMassG: z.number().nullable(), bars: z.int().nullable() });
 export type Mould = z.infer<typeof Mould>;
+export const NewMould = z.strictObject({
+  id,
+  name: text('Mould name', 80),
+  oilMassG: optionalMeasure('Oil mass', 1, 500_000, 'g'),
+  bars: count('Bars', 1, 500).nullable().default(null),
+});
+export type NewMould = z.infer<typeof NewMould>;
 
 const params = z.object({ batchId: z.uuid() });
-const { cursor: _cursor, limit: _limit, ...countable } = BatchesFilter.shape;
+const { cursor: _cursor, limit: _limit, ...unpaged } = BatchesFilter.shape;
+/** The filter without its page: for the count and the export. */
+export const BatchesChoice = z.object(unpaged);
+export type BatchesChoice = z.infer<typeof BatchesChoice>;
 
 export const batchesApi = {
   list: endpoint({ method: 'get', path: '/api/batches', summary: 'The log', right: 'workshop.read', query: BatchesFilter, reply: pageOf(BatchRow) }),
-  count: endpoint({ method: 'get', path: '/api/batches/count', summary: 'How many batches a filter finds, and how many there are', right: 'workshop.read', query: z.object(countable), reply: z.object({ found: z.int(), all: z.int() }) }),
+  count: endpoint({ method: 'get', path: '/api/batches/count', summary: 'How many batches a filter finds, and how many there are', right: 'workshop.read', query: BatchesChoice, reply: z.object({ found: z.int(), all: z.int() }) }),
   read: endpoint({ method: 'get', path: '/api/batches/:batchId', summary: 'One batch', right: 'workshop.read', params, reply: AnyBatchView }),
   create: endpoint({ method: 'post', path: '/api/batches', summary: 'Log a batch', right: 'batch.write', body: NewBatch, reply: BatchView, creates: true }),
   change: endpoint({ method: 'patch', path: '/api/batches/:batchId', summary: 'Change a batch', right: 'batch.write', params, body: ChangeBatch, reply: BatchView, versioned: true }),
   moulds: endpoint({ method: 'get', path: '/api/moulds', summary: 'Moulds by name', right: 'workshop.read', reply: z.object({ items: z.array(Mould) }) }),
-  addMould: endpoint({ method: 'post', path: '/api/moulds', summary: 'Add a mould', right: 'batch.write', body: z.strictObject({ id, name: text('Mould name', 80), oilMassG: z.number().gt(0).max(500_000).nullable().default(null), bars: z.int().min(1).max(500).nullable().default(null) }), reply: Mould, creates: true }),
+  addMould: endpoint({ method: 'post', path: '/api/moulds', summary: 'Add a mould', right: 'batch.write', body: NewMould, reply: Mould, creates: true }),
 };

@@ -5,17 +5,26 @@ export function cursorOf(values: readonly (string | number | null)[]): string {
   return Buffer.from(JSON.stringify(values)).toString('base64url');
 }
 
+const KINDS = {
+  text: (value: unknown) => typeof value === 'string' && !value.includes('\u0000'),
+  day: (value: unknown) => typeof value === 'string' && /^\d{4}-\d\d-\d\d$/.test(value) && !Number.isNaN(Date.parse(value)),
+  number: (value: unknown) => typeof value === 'number',
+  integer: (value: unknown) => Number.isInteger(value) && Math.abs(value as number) < 2 ** 31,
+  uuid: (value: unknown) => typeof value === 'string' && /^[\da-f]{8}(?:-[\da-f]{4}){3}-[\da-f]{12}$/i.test(value),
+};
+export type KeyKind = keyof typeof KINDS;
+
 /**
  * The values in a cursor.
  *
- * @param length how many values the list's order has
+ * @param kinds kind of each value of the list's order; anybody can write a cursor, so they are checked
  * @throws Problem 422 when the cursor is not one of ours
  */
-export function readCursor(cursor: string, length: number): (string | number | null)[] {
+export function readCursor(cursor: string, kinds: readonly KeyKind[]): (string | number)[] {
   try {
     const values: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
-    if (Array.isArray(values) && values.length === length && values.every((value) => value === null || typeof value === 'string' || typeof value === 'number')) {
-      return values as (string | number | null)[];
+    if (Array.isArray(values) && values.length === kinds.length && kinds.every((kind, index) => KINDS[kind](values[index]))) {
+      return values as (string | number)[];
     }
   } catch {
     // Not JSON: told the same way as a cursor of the wrong shape.

@@ -41,7 +41,8 @@ export function optionalMeasure(name: string, lower: number, upper: number, unit
 export function day(name: string) {
   return z.iso
     .date({ error: `${name} must be a day such as 2026-03-14` })
-    .refine((value) => value >= '1990-01-01' && value <= '2100-12-31', `${name} must lie between 1990 and 2100`);
+    // What is no day at all was told already.
+    .refine((value) => !/^\d{4}-/.test(value) || (value >= '1990-01-01' && value <= '2100-12-31'), `${name} must lie between 1990 and 2100`);
 }
 
 export function optionalDay(name: string) {

@@ -51,7 +51,7 @@ export async function readFormula(tx: WorkshopTransaction, formulaId: string): P
 
 /** A page of formulas by name. */
 export async function listFormulas(tx: WorkshopTransaction, { cursor, limit }: { cursor?: string; limit: number }) {
-  const [name, lastId] = cursor ? readCursor(cursor, 2) : [null, null];
+  const [name, lastId] = cursor ? readCursor(cursor, ['text', 'uuid']) : [null, null];
   const statement = `${FORMULA_SQL} where $1::text is null or (f.name, f.id) > ($1, $2::uuid) order by f.name, f.id limit $3`;
   const rows = await tx.rows<FormulaRow>(statement, [name, lastId, limit + 1]);
   const page = pageFrom(rows, limit, (row) => [row.name, row.id]);

@@ -32,7 +32,7 @@ export async function readLot(tx: WorkshopTransaction, lotId: string): Promise<L
 
 /** A page of lots: those in stock first received last; `find` looks in codes and materials' names. */
 export async function listLots(tx: WorkshopTransaction, filter: z.output<typeof LotsFilter>) {
-  const [cursorDay, cursorId] = filter.cursor ? readCursor(filter.cursor, 2) : [null, null];
+  const [cursorDay, cursorId] = filter.cursor ? readCursor(filter.cursor, ['day', 'uuid']) : [null, null];
   const statement = `${LOT_SQL}
     where ($1::text is null or m.kind = $1) and ($2::text is null or l.standing = $2) and ($3::uuid is null or l.supplier_id = $3)
       and ($4::uuid is null or l.material_id = $4)

@@ -21,7 +21,7 @@ export async function listMaterials(tx: WorkshopTransaction, { cursor, limit, ki
   const query = tx.manager.createQueryBuilder(Material, 'material').where('true').orderBy('material.name').addOrderBy('material.id').limit(limit + 1);
   if (kind) query.andWhere('material.kind = :kind', { kind });
   if (cursor) {
-    const [name, lastId] = readCursor(cursor, 2);
+    const [name, lastId] = readCursor(cursor, ['text', 'uuid']);
     query.andWhere('(material.name, material.id) > (:name, :lastId::uuid)', { name, lastId });
   }
   const { items, next } = pageFrom(await query.getMany(), limit, (material) => [material.name, material.id]);

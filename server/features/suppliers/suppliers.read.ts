@@ -30,7 +30,7 @@ export async function readSupplier(tx: WorkshopTransaction, supplierId: string):
 export async function listSuppliers(tx: WorkshopTransaction, { cursor, limit }: { cursor?: string; limit: number }) {
   const query = tx.manager.createQueryBuilder(Supplier, 'supplier').orderBy('supplier.name').addOrderBy('supplier.id').limit(limit + 1);
   if (cursor) {
-    const [name, lastId] = readCursor(cursor, 2);
+    const [name, lastId] = readCursor(cursor, ['text', 'uuid']);
     query.where('(supplier.name, supplier.id) > (:name, :lastId::uuid)', { name, lastId });
   }
   const { items, next } = pageFrom(await query.getMany(), limit, (supplier) => [supplier.name, supplier.id]);

@@ -52,7 +52,7 @@ describe('importing a batch history', () => {
     expect(outcomes).toEqual([
       { code: 'H-1', outcomes: { 'soda-ash': 2, ricing: 0 } },
       { code: 'H-2', outcomes: { 'soda-ash': 0 } },
-      { code: 'H-3', outcomes: null },
+      { code: 'H-3', outcomes: {} },
     ]);
   });
 

@@ -1,0 +1,50 @@
+import { Column, Entity, PrimaryColumn } from 'typeorm';
+import type { BatchState, Cover, Gel, Palette, Trace } from '#shared/words/batch-words.ts';
+import type { Method } from '#shared/words/methods.ts';
+
+@Entity('batch')
+export class Batch {
+  @PrimaryColumn('uuid', { name: 'workshop_id' }) workshopId: string;
+  @PrimaryColumn('uuid') id: string;
+  @Column('integer') version: number;
+  @Column('text') code: string;
+  @Column('date', { name: 'made_on' }) madeOn: string;
+  @Column('timestamptz', { name: 'poured_at', nullable: true }) pouredAt: Date | null;
+  @Column('text') method: Method;
+  @Column('text') state: BatchState;
+  @Column('uuid', { name: 'formula_id', nullable: true }) formulaId: string | null;
+  @Column('uuid', { name: 'formula_version_id', nullable: true }) formulaVersionId: string | null;
+  @Column('uuid', { name: 'maker_id', nullable: true }) makerId: string | null;
+  @Column('uuid', { name: 'mould_id', nullable: true }) mouldId: string | null;
+  @Column('integer', { nullable: true }) bars: number | null;
+  @Column('double precision', { name: 'oil_mass_g', nullable: true }) oilMassG: number | null;
+  @Column('double precision', { name: 'water_to_lye', nullable: true }) waterToLye: number | null;
+  @Column('double precision', { name: 'superfat_fraction', nullable: true }) superfatFraction: number | null;
+  @Column('double precision', { name: 'oil_temperature_c', nullable: true }) oilTemperatureC: number | null;
+  @Column('double precision', { name: 'lye_temperature_c', nullable: true }) lyeTemperatureC: number | null;
+  @Column('double precision', { name: 'batter_temperature_c', nullable: true }) batterTemperatureC: number | null;
+  @Column('double precision', { name: 'scent_temperature_c', nullable: true }) scentTemperatureC: number | null;
+  @Column('double precision', { name: 'room_temperature_c', nullable: true }) roomTemperatureC: number | null;
+  @Column('double precision', { name: 'humidity_fraction', nullable: true }) humidityFraction: number | null;
+  @Column('integer', { name: 'blend_seconds', nullable: true }) blendSeconds: number | null;
+  @Column('text', { name: 'trace_at_scent', nullable: true }) traceAtScent: Trace | null;
+  @Column('text', { name: 'trace_at_pour', nullable: true }) traceAtPour: Trace | null;
+  @Column('double precision', { name: 'minutes_to_pour', nullable: true }) minutesToPour: number | null;
+  @Column('text', { nullable: true }) cover: Cover | null;
+  @Column('boolean', { name: 'is_sprayed', nullable: true }) isSprayed: boolean | null;
+  @Column('text', { nullable: true }) gel: Gel | null;
+  @Column('double precision', { name: 'cook_temperature_c', nullable: true }) cookTemperatureC: number | null;
+  @Column('double precision', { name: 'cook_minutes', nullable: true }) cookMinutes: number | null;
+  @Column('double precision', { name: 'cook_loss_fraction', nullable: true }) cookLossFraction: number | null;
+  @Column('double precision', { name: 'mould_hours', nullable: true }) mouldHours: number | null;
+  @Column('double precision', { name: 'cut_hours', nullable: true }) cutHours: number | null;
+  @Column('date', { name: 'unmoulded_on', nullable: true }) unmouldedOn: string | null;
+  @Column('date', { name: 'cut_on', nullable: true }) cutOn: string | null;
+  @Column('double precision', { name: 'fragrance_fraction', nullable: true }) fragranceFraction: number | null;
+  @Column('jsonb', { nullable: true }) palette: Palette | null;
+  @Column('boolean', { name: 'has_embeds' }) hasEmbeds: boolean;
+  @Column('text', { nullable: true }) note: string | null;
+  @Column('text', { name: 'created_from', nullable: true }) createdFrom: string | null;
+  @Column({ type: 'timestamptz', name: 'created_at', insert: false, update: false }) createdAt: Date;
+  @Column('timestamptz', { name: 'updated_at' }) updatedAt: Date;
+}
