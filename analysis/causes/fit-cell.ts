@@ -12,6 +12,9 @@ export const ASKED = 1;
 const PROFILE_BELOW_P = 0.3;
 const PROFILE_UP_TO = 5000;
 
+/** A step of 1e-6 in log odds is beyond anything shown; the rest of the default's way would be a quarter of the board's time. */
+const ARRIVED = 1e-6;
+
 /** Log odds of the asked input: for a level, or for one reference spread of a number. */
 export interface LogOdds {
   estimate: number;
@@ -39,7 +42,7 @@ export function fitCell(make: (adjusters: readonly Column[]) => Design, chosen: 
   for (let keep = chosen.length; keep >= 0; keep--) {
     const adjusters = chosen.slice(0, keep);
     const design = make(adjusters);
-    const fit = firthFit(design, { start: atBaseRate(design) });
+    const fit = firthFit(design, { start: atBaseRate(design), tolerance: ARRIVED });
     if (fit === null || !fit.converged) continue;
     const test = ratioTest(design, fit, ASKED);
     if (test === null || !test.converged) continue;

@@ -80,7 +80,13 @@ export function lotsBehaviour({ rows, lotInput, faults, cells }: BehaviourQuesti
   const held = [...rows].sort((a, b) => byText(a.id, b.id));
   const counting = held.filter((row) => reasonLeftOut(row) === null);
   const lots = new Map<string, BatchRow[]>();
-  for (const row of counting) for (const lot of new Set(row.holds[lotInput] ?? [])) lots.set(lot, [...(lots.get(lot) ?? []), row]);
+  for (const row of counting) {
+    for (const lot of new Set(row.holds[lotInput] ?? [])) {
+      const own = lots.get(lot);
+      if (own) own.push(row);
+      else lots.set(lot, [row]);
+    }
+  }
   const ids = [...lots.keys()].sort(byText);
   const grades = new Map(cells.filter((cell) => cell.input === lotInput && cell.level !== null).map((cell) => [`${cell.fault}\n${cell.level}`, cell]));
   const byLot = new Map<string, LotFault[]>(ids.map((lot) => [lot, []]));

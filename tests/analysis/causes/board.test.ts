@@ -23,16 +23,16 @@ describe('causesBoard on a workshop with known truth', () => {
     expect(cellOf('acceleration', 'maker', 'tomasz').raw.estimate!).toBeGreaterThan(cellOf('acceleration', 'maker', 'tomasz').estimate!);
   });
 
-  it('does not blame the innocent lot for the ash of the maker who poured it, in forty workshops', () => {
+  it('does not blame the innocent lot for the ash of the maker who poured it, in twenty-four workshops', () => {
     let rawBlames = 0;
     let blames = 0;
-    for (let seed = 1; seed <= 40; seed++) {
+    for (let seed = 1; seed <= 24; seed++) {
       const { cells } = causesBoard({ rows: simulatedWorkshop({ seed: 100 + seed, batches: 200 }), inputs, faults: namedFaults.filter((fault) => fault.slug === 'soda-ash') });
       const cell = cellOf('soda-ash', 'fragranceLot', INNOCENT_LOT, cells);
       if (cell.raw.lower! > 1) rawBlames++;
       if (firm(cell)) blames++;
     }
-    expect(rawBlames).toBeGreaterThanOrEqual(5);
+    expect(rawBlames).toBeGreaterThanOrEqual(3);
     expect(blames).toBeLessThanOrEqual(1);
   }, 60_000);
 
