@@ -9,3 +9,16 @@ export type Stage = z.infer<typeof Stage>;
 export function stageOrder(stage: Stage): number {
   return STAGES.indexOf(stage);
 }
+
+/** A stage inside a sentence: "cannot be seen yet at the cut". */
+export const STAGE_IN_WORDS: Readonly<Record<Stage, string>> = {
+  pour: 'the pour',
+  unmould: 'unmoulding',
+  cut: 'the cut',
+  'cure-w1': 'week 1',
+  'cure-w2': 'week 2',
+  'cure-w4': 'week 4',
+  'cure-w6': 'week 6',
+  release: 'release',
+  'in-use': 'a complaint',
+};
