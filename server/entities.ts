@@ -5,6 +5,8 @@ import { MouldRecord } from './features/batches/mould.entity.ts';
 import { Formula, FormulaLine, FormulaVersion } from './features/formulas/formula.entity.ts';
 import { Import } from './features/imports/import.entity.ts';
 import { LotStandingChangeRow } from './features/lots/lot-standing-change.entity.ts';
+import { Finding } from './features/inspections/finding.entity.ts';
+import { Inspection } from './features/inspections/inspection.entity.ts';
 import { Lot } from './features/lots/lot.entity.ts';
 import { Material } from './features/materials/material.entity.ts';
 import { Account } from './features/session/account.entity.ts';
@@ -16,10 +18,12 @@ export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   Batch,
   BatchIngredient,
   CookStageRow,
+  Finding,
   Formula,
   FormulaLine,
   FormulaVersion,
   Import,
+  Inspection,
   Lot,
   LotStandingChangeRow,
   Material,

@@ -5,9 +5,11 @@ import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
 import { batchesRoutes } from './features/batches/batches.routes.ts';
 import { exportsRoutes } from './features/exports/exports.routes.ts';
+import { faultsRoutes } from './features/faults/faults.routes.ts';
 import { formulasRoutes } from './features/formulas/formulas.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
 import { importsRoutes } from './features/imports/imports.routes.ts';
+import { inspectionsRoutes } from './features/inspections/inspections.routes.ts';
 import { lotsRoutes } from './features/lots/lots.routes.ts';
 import { materialsRoutes } from './features/materials/materials.routes.ts';
 import { sessionRoutes } from './features/session/session.routes.ts';
@@ -37,6 +39,8 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   importsRoutes(api);
   batchesRoutes(api);
   exportsRoutes(api);
+  faultsRoutes(api);
+  inspectionsRoutes(api);
   around.app.get('/api/openapi.json', (_request, response) => {
     response.json(openApiDocument(api.served, around.config.publicUrl));
   });

@@ -1,16 +1,21 @@
 import { z } from 'zod';
 import { endpoint } from './http/endpoint.ts';
-import { changeOf, count, id, instant, optionalText, recordFields } from './http/fields.ts';
+import { changeOf, count, id, instant, measure, optionalText, recordFields } from './http/fields.ts';
 import { Answer, FaultSlug, Severity } from './words/fault-words.ts';
-import { Palette } from './words/batch-words.ts';
+import { BatchState, Palette } from './words/batch-words.ts';
 import { Stage } from './words/stages.ts';
 
 const share = z.number().min(0, 'Coordinates lie between 0 and 1').max(1, 'Coordinates lie between 0 and 1');
 
+/** Sums of decimals such as 0.1 + 0.9 may end a hair beyond the edge. */
+const EDGE = 1e-9;
+
 /** A point, box or outline on a photo, in 0..1 of the upright picture. */
 export const MarkWish = z.discriminatedUnion('shape', [
   z.strictObject({ id, photoId: z.uuid(), shape: z.literal('point'), x: share, y: share }),
-  z.strictObject({ id, photoId: z.uuid(), shape: z.literal('box'), x: share, y: share, width: share, height: share }),
+  z
+    .strictObject({ id, photoId: z.uuid(), shape: z.literal('box'), x: share, y: share, width: share, height: share })
+    .refine((box) => box.x + box.width <= 1 + EDGE && box.y + box.height <= 1 + EDGE, 'A box must lie inside the picture'),
   z.strictObject({ id, photoId: z.uuid(), shape: z.literal('outline'), x: share, y: share, outline: z.array(z.tuple([share, share])).min(3).max(200) }),
 ]);
 export type MarkWish = z.infer<typeof MarkWish>;
@@ -55,11 +60,23 @@ export const FindingView = z.object({
   note: z.string().nullable(),
   marks: z.array(MarkView),
   isWithdrawn: z.boolean(),
+  /** Set while the batch is held, e.g. since this finding is one of safety. */
+  batchHoldReason: z.string().nullable(),
 });
 export type FindingView = z.infer<typeof FindingView>;
 
 export const READING_KINDS = ['loaf-mass-g', 'bar-mass-g', 'room-temperature-c', 'humidity-fraction', 'ph', 'alkalinity-pass'] as const;
-export const ReadingWish = z.strictObject({ id, kind: z.enum(READING_KINDS), value: z.number(), bar: z.int().min(1).max(2000).nullable().default(null) });
+const readingOf = (kind: (typeof READING_KINDS)[number], value: z.ZodNumber) => z.strictObject({ id, kind: z.literal(kind), value, bar: z.int().min(1).max(2000).nullable().default(null) });
+export const ReadingWish = z.discriminatedUnion('kind', [
+  readingOf('loaf-mass-g', measure('Loaf mass', 0, 500_000, 'g')),
+  readingOf('bar-mass-g', measure('Bar mass', 0, 5_000, 'g')),
+  readingOf('room-temperature-c', measure('Room temperature', -5, 50, '°C')),
+  readingOf('humidity-fraction', measure('Humidity', 0.01, 1)),
+  readingOf('ph', measure('pH', 0, 14)),
+  /** 1 passed, 0 failed. */
+  readingOf('alkalinity-pass', measure('Alkalinity check (1 passed, 0 failed)', 0, 1).int()),
+]);
+export type ReadingWish = z.infer<typeof ReadingWish>;
 
 /** Answers of one look; a fault not named stays as it was, at first `not-checked`. */
 export const ChecklistAnswers = z.array(z.strictObject({ fault: FaultSlug, answer: Answer })).max(80);
@@ -96,6 +113,8 @@ export const InspectionView = z.object({
   answers: z.array(z.object({ fault: FaultSlug, answer: Answer })),
   findings: z.array(FindingView),
   readings: z.array(z.object({ id: z.string(), kind: z.string(), value: z.number(), bar: z.int().nullable() })),
+  batchState: BatchState,
+  batchHoldReason: z.string().nullable(),
 });
 export type InspectionView = z.infer<typeof InspectionView>;
 
