@@ -3,8 +3,8 @@ import { reasonLeftOut, tally } from '#analysis/causes/columns.ts';
 import { byText } from '#analysis/causes/exposure.ts';
 import { wilsonOrNone } from '#analysis/intervals/wilson-interval.ts';
 import type { ShareInterval } from '#analysis/intervals/wilson-interval.ts';
-import { expectedFound, talliesOf } from './expected-rate.ts';
-import type { PeerRates } from './expected-rate.ts';
+import { againstPeers, talliesOf } from './expected-rate.ts';
+import type { AgainstPeers } from './expected-rate.ts';
 import { priorFromLots, shrunkRatio } from './shrink.ts';
 import { suggestStanding } from './standing.ts';
 import type { StandingReason, SuggestedStanding } from './standing.ts';
@@ -89,18 +89,20 @@ export function lotsBehaviour({ rows, lotInput, faults, cells }: BehaviourQuesti
   }
   const ids = [...lots.keys()].sort(byText);
   const grades = new Map(cells.filter((cell) => cell.input === lotInput && cell.level !== null).map((cell) => [`${cell.fault}\n${cell.level}`, cell]));
+  const sizes = new Map(ids.map((lot) => [lot, sizesOf(lots.get(lot)!)]));
   const byLot = new Map<string, LotFault[]>(ids.map((lot) => [lot, []]));
   for (const fault of faults) {
     const peers = talliesOf(counting, fault);
-    const prior = priorFromLots(ids.map((lot) => countsOf(peers, lots.get(lot)!, fault)));
-    for (const lot of ids) byLot.get(lot)!.push(faultOf(peers, lots.get(lot)!, fault, prior, grades.get(`${fault}\n${lot}`) ?? null, cells.length > 0));
+    const counts = ids.map((lot) => againstPeers(peers, lots.get(lot)!, fault));
+    const prior = priorFromLots(counts.map(({ all }) => all));
+    for (const [i, lot] of ids.entries()) byLot.get(lot)!.push(faultOf(counts[i]!, sizes.get(lot)!, fault, prior, grades.get(`${fault}\n${lot}`) ?? null, cells.length > 0));
   }
   return ids.map((lot) => {
     const own = lots.get(lot)!;
     const answers = byLot.get(lot)!;
     return {
       lot, n: own.length,
-      families: { cold: { batches: own.filter((row) => row.family === 'cold').length }, hot: { batches: own.filter((row) => row.family === 'hot').length } },
+      families: { cold: { batches: sizes.get(lot)!.cold }, hot: { batches: sizes.get(lot)!.hot } },
       leftOut: tally(held.filter((row) => row.holds[lotInput]?.includes(lot)).flatMap((row) => reasonLeftOut(row) ?? [])),
       faults: answers, verdict: gravest(answers.map((answer) => answer.verdict)),
       ...suggestStanding(answers), method: 'gamma-poisson',
@@ -112,27 +114,27 @@ function gravest(verdicts: readonly LotVerdict[]): LotVerdict {
   return LOT_VERDICTS.find((verdict) => verdicts.includes(verdict)) ?? 'too-few';
 }
 
-function countsOf(peers: PeerRates, own: readonly BatchRow[], fault: string): { found: number; expected: number } {
-  return { found: own.reduce((sum, row) => sum + ((row.outcomes[fault] ?? 0) > 0 ? 1 : 0), 0), expected: expectedFound(peers, own, fault) };
+interface Sizes { all: number; cold: number; hot: number }
+
+function sizesOf(own: readonly BatchRow[]): Sizes {
+  const hot = own.reduce((sum, row) => sum + (row.family === 'hot' ? 1 : 0), 0);
+  return { all: own.length, cold: own.length - hot, hot };
 }
 
-function faultOf(peers: PeerRates, own: readonly BatchRow[], fault: string, prior: number, cell: BoardCell | null, boardAsked: boolean): LotFault {
+function faultOf(counts: Record<keyof Sizes, AgainstPeers>, sizes: Sizes, fault: string, prior: number, cell: BoardCell | null, boardAsked: boolean): LotFault {
   const agrees = !boardAsked || (cell !== null && ['settled', 'likely', 'hint'].includes(cell.grade) && cell.direction === 'more');
-  const of = (family: 'cold' | 'hot' | null) => rateOf(peers, family === null ? own : own.filter((row) => row.family === family), fault, prior, agrees);
-  const all = of(null);
+  const of = (part: keyof Sizes) => rateOf(counts[part], sizes[part], prior, agrees);
+  const all = of('all');
   return { fault, verdict: all.verdict, all, cold: of('cold'), hot: of('hot'), prior, boardGrade: cell?.grade ?? null };
 }
 
-function rateOf(peers: PeerRates, own: readonly BatchRow[], fault: string, prior: number, agrees: boolean): LotRate {
-  const checked = own.filter((row) => row.outcomes[fault] !== undefined);
-  const { found: events, expected } = countsOf(peers, checked, fault);
-  const n = checked.length;
-  const base = { n, events, notChecked: own.length - n, rate: wilsonOrNone(events, n), expected };
+function rateOf({ n, found, expected }: AgainstPeers, batches: number, prior: number, agrees: boolean): LotRate {
+  const base = { n, events: found, notChecked: batches - n, rate: wilsonOrNone(found, n), expected };
   if (n === 0) return { ...base, expectedRate: null, ratio: null, chanceTwice: null, shownRate: null, verdict: 'too-few' };
-  const { mean, lower, upper, chanceTwice } = shrunkRatio(events, expected, prior);
+  const { mean, lower, upper, chanceTwice } = shrunkRatio(found, expected, prior);
   return {
     ...base, expectedRate: expected / n, ratio: { mean, lower, upper }, chanceTwice,
-    shownRate: Math.min(1, (expected / n) * mean), verdict: verdictOf(events, chanceTwice, lower, upper, agrees),
+    shownRate: Math.min(1, (expected / n) * mean), verdict: verdictOf(found, chanceTwice, lower, upper, agrees),
   };
 }
 
