@@ -9,8 +9,10 @@ import { Finding } from './features/inspections/finding.entity.ts';
 import { Inspection } from './features/inspections/inspection.entity.ts';
 import { Lot } from './features/lots/lot.entity.ts';
 import { Material } from './features/materials/material.entity.ts';
+import { Member } from './features/members/member.entity.ts';
 import { Account } from './features/session/account.entity.ts';
 import { Supplier } from './features/suppliers/supplier.entity.ts';
+import { Workshop } from './features/workshop/workshop.entity.ts';
 
 /** Every entity; TypeORM takes classes, not globs. */
 export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
@@ -28,5 +30,7 @@ export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   LotStandingChangeRow,
   Material,
   MouldRecord,
+  Member,
   Supplier,
+  Workshop,
 ];

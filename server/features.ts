@@ -3,6 +3,7 @@ import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
+import { auditRoutes } from './features/audit/audit.routes.ts';
 import { batchesRoutes } from './features/batches/batches.routes.ts';
 import { exportsRoutes } from './features/exports/exports.routes.ts';
 import { faultsRoutes } from './features/faults/faults.routes.ts';
@@ -12,8 +13,13 @@ import { importsRoutes } from './features/imports/imports.routes.ts';
 import { inspectionsRoutes } from './features/inspections/inspections.routes.ts';
 import { lotsRoutes } from './features/lots/lots.routes.ts';
 import { materialsRoutes } from './features/materials/materials.routes.ts';
+import { membersRoutes } from './features/members/members.routes.ts';
+import { outboxRoutes } from './features/outbox/outbox.routes.ts';
+import { makeToken, tokenHash } from './features/session/one-time-token.ts';
+import { hashPassword, passwordFits, refuseWeakPassword } from './features/session/password.ts';
 import { sessionRoutes } from './features/session/session.routes.ts';
 import { suppliersRoutes } from './features/suppliers/suppliers.routes.ts';
+import { workshopRoutes } from './features/workshop/workshop.routes.ts';
 import type { Api } from './http/api.ts';
 import { openApiDocument } from './http/openapi.ts';
 import type { Throttle } from './http/rate-limit.ts';
@@ -31,7 +37,11 @@ export interface Surroundings {
 /** Every feature's routes, one line each. */
 export function serveFeatures(api: Api, around: Surroundings): void {
   healthRoutes(api, { uploadsDir: around.config.uploadsDir, isStopping: around.isStopping });
-  sessionRoutes(api, around.throttle);
+  sessionRoutes(api, around.throttle, around.config);
+  membersRoutes(api, { config: around.config, throttle: around.throttle, door: { makeToken, tokenHash, hashPassword, passwordFits, refuseWeakPassword } });
+  workshopRoutes(api);
+  auditRoutes(api);
+  outboxRoutes(api, around.config);
   suppliersRoutes(api);
   materialsRoutes(api);
   lotsRoutes(api);
