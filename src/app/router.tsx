@@ -30,7 +30,10 @@ export function makeRouter(client: QueryClient) {
       children: [
         {
           errorElement: <ScreenError />,
-          children: [{ path: paths.pieces, lazy: () => import('./screens/PiecesScreen.tsx') }],
+          children: [
+            { path: paths.batches, lazy: () => import('./screens/BatchesScreen.tsx') },
+            { path: paths.pieces, lazy: () => import('./screens/PiecesScreen.tsx') },
+          ],
         },
       ],
     },

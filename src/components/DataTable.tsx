@@ -11,6 +11,11 @@ interface DataTableProps<Row extends RowData> {
   rows: Row[];
   rowId: (row: Row) => string;
   onOpen?: (row: Row) => void;
+  /** `x` on a row. */
+  onSelect?: (row: Row) => void;
+  isSelected?: (row: Row) => boolean;
+  /** The column the rows are sorted by. */
+  sortedBy?: { id: string; direction: 'ascending' | 'descending' };
   /** Classes by column id: for both head and cell, e.g. to leave a column out on a phone. */
   columnClass?: Record<string, string>;
 }
@@ -21,7 +26,7 @@ function step(from: HTMLElement, by: 1 | -1): void {
 }
 
 /** Rows under a sticky head. `j` and `k` move, Enter opens; a row's own links and blocks keep working. */
-export function DataTable<Row extends RowData>({ label, columns, rows, rowId, onOpen, columnClass = {} }: DataTableProps<Row>) {
+export function DataTable<Row extends RowData>({ label, columns, rows, rowId, onOpen, onSelect, isSelected, sortedBy, columnClass = {} }: DataTableProps<Row>) {
   const body = useRef<HTMLTableSectionElement>(null);
   const table = useTable({ features: listFeatures, columns, data: rows, getRowId: rowId });
   const key = (event: KeyboardEvent<HTMLTableRowElement>, row: Row) => {
@@ -29,6 +34,7 @@ export function DataTable<Row extends RowData>({ label, columns, rows, rowId, on
     if (event.key === 'j' || event.key === 'ArrowDown') step(event.currentTarget, 1);
     else if (event.key === 'k' || event.key === 'ArrowUp') step(event.currentTarget, -1);
     else if (event.key === 'Enter') onOpen?.(row);
+    else if (event.key === 'x' && onSelect) onSelect(row);
     else return;
     event.preventDefault();
     event.stopPropagation();
@@ -40,7 +46,7 @@ export function DataTable<Row extends RowData>({ label, columns, rows, rowId, on
           {table.getHeaderGroups().map((group) => (
             <tr key={group.id} className="border-b-2 border-ink">
               {group.headers.map((header) => (
-                <th key={header.id} scope="col" className={`px-2.5 pb-1.5 pt-2 text-left align-bottom text-note font-[560] whitespace-nowrap text-ink-2 ${columnClass[header.column.id] ?? ''}`}>
+                <th key={header.id} scope="col" aria-sort={sortedBy?.id === header.column.id ? sortedBy.direction : undefined} className={`px-2.5 pb-1.5 pt-2 text-left align-bottom text-note font-[560] whitespace-nowrap text-ink-2 ${columnClass[header.column.id] ?? ''}`}>
                   <table.FlexRender header={header} />
                 </th>
               ))}
@@ -49,7 +55,7 @@ export function DataTable<Row extends RowData>({ label, columns, rows, rowId, on
         </thead>
         <tbody ref={body}>
           {table.getRowModel().rows.map((row) => (
-            <tr key={row.id} tabIndex={0} className="border-t border-line hover:bg-lift focus-visible:bg-lift" onKeyDown={(event) => key(event, row.original)}>
+            <tr key={row.id} tabIndex={0} data-row={row.id} className={`border-t border-line ${isSelected?.(row.original) ? 'bg-wait-wash' : 'hover:bg-lift focus-visible:bg-lift'}`} onKeyDown={(event) => key(event, row.original)}>
               {row.getAllCells().map((cell) => (
                 <td key={cell.id} className={`h-10 px-2.5 text-row whitespace-nowrap coarse:h-13 ${columnClass[cell.column.id] ?? ''}`}>
                   <table.FlexRender cell={cell} />
