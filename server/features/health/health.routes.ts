@@ -15,6 +15,7 @@ export function healthRoutes(api: Api, { uploadsDir, isStopping }: { uploadsDir:
          current_setting('fsync') = 'on' and current_setting('full_page_writes') = 'on' and current_setting('synchronous_commit') <> 'off' durable`,
     ));
     if (applied?.count !== MIGRATIONS.length) throw busy('The schema is not up to date');
+    if (!applied.durable) throw busy('The database may lose what it acknowledged: fsync, full_page_writes and synchronous_commit must be on');
     await access(uploadsDir, constants.W_OK).catch(() => {
       throw busy('The photo store cannot be written');
     });
