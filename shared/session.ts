@@ -56,7 +56,9 @@ export type Preferences = z.infer<typeof Preferences>;
 
 export const AskReset = z.strictObject({ email: Email });
 export const ResetPassword = z.strictObject({ token: z.string().min(20).max(100), password: NewPassword });
+export type ResetPassword = z.infer<typeof ResetPassword>;
 export const ChangePassword = z.strictObject({ current: z.string().min(1, 'Type your current password').max(128), password: NewPassword });
+export type ChangePassword = z.infer<typeof ChangePassword>;
 
 /** Shown on the sign-in page of a demo only. */
 export const DemoAccounts = z.object({

@@ -37,6 +37,15 @@ export function makeRouter(client: QueryClient) {
         },
       ],
     },
-    { path: paths.signIn, errorElement: <ScreenError />, HydrateFallback: () => null, lazy: () => import('./screens/SignInScreen.tsx') },
+    {
+      errorElement: <ScreenError />,
+      HydrateFallback: () => null,
+      children: [
+        { path: paths.signIn, lazy: () => import('./screens/SignInScreen.tsx') },
+        { path: paths.signUp, lazy: () => import('./screens/SignUpScreen.tsx') },
+        { path: paths.reset, lazy: () => import('./screens/ResetScreen.tsx') },
+        { path: paths.invitation(':token'), lazy: () => import('./screens/InvitationScreen.tsx') },
+      ],
+    },
   ]);
 }

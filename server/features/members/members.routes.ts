@@ -18,8 +18,7 @@ export function membersRoutes(api: Api, { config, throttle, door }: { config: Co
   api.open(membersApi.readInvitation, ({ lobby, params }) => readInvitation(lobby, door, params.token));
   api.open(membersApi.accept, async ({ lobby, body, request }) => {
     await throttle.take('mail', request.ip ?? 'unknown');
-    await acceptInvitation(lobby, door, body);
-    return ACCEPTED;
+    return { ...ACCEPTED, workshopId: await acceptInvitation(lobby, door, body) };
   });
   api.serve(membersApi.change, ({ tx, params, body, version }) => changeMember(tx, params.memberId, body, version));
 }

@@ -70,9 +70,10 @@ export async function readInvitation(lobby: Lobby, door: Door, token: string): P
 /**
  * Joins by an invitation; somebody with an account proves it with their password.
  *
+ * @returns id of the workshop that was joined
  * @throws Problem 404 for a link that is no more, 422 for a wrong or weak password
  */
-export async function acceptInvitation(lobby: Lobby, door: Door, { token, name, password }: z.output<typeof AcceptInvitation>): Promise<void> {
+export async function acceptInvitation(lobby: Lobby, door: Door, { token, name, password }: z.output<typeof AcceptInvitation>): Promise<string> {
   const hash = door.tokenHash(token);
   const offered = await lobby((tx) => findInvitation(tx, hash));
   if (offered.account_id) {
@@ -81,7 +82,7 @@ export async function acceptInvitation(lobby: Lobby, door: Door, { token, name, 
     door.refuseWeakPassword(password, [offered.email.split('@')[0] ?? '']);
   }
   const passwordHash = offered.account_id ? '' : await door.hashPassword(password);
-  await lobby(async (tx) => {
+  return lobby(async (tx) => {
     const used = await tx.rows('update one_time_token set used_at = now() where token_hash = $1 and used_at is null and expires_at > now() returning token_hash', [hash]);
     if (used.length === 0) throw goneLink();
     const accountId = offered.account_id ?? uuidv7();
@@ -93,6 +94,7 @@ export async function acceptInvitation(lobby: Lobby, door: Door, { token, name, 
        on conflict (workshop_id, account_id) do update set role = excluded.role, ended_at = null, version = member.version + 1, updated_at = now()`,
       [offered.workshop_id, memberId, accountId, name, offered.role],
     );
+    return offered.workshop_id;
   });
 }
 
