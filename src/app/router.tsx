@@ -31,6 +31,9 @@ export function makeRouter(client: QueryClient) {
         {
           errorElement: <ScreenError />,
           children: [
+            { index: true, lazy: () => import('./screens/TodayScreen.tsx') },
+            { path: paths.inspect, lazy: () => import('./screens/InspectScreen.tsx') },
+            { path: '/inspect/:batchId', lazy: () => import('./screens/InspectBatchScreen.tsx') },
             { path: paths.batches, lazy: () => import('./screens/BatchesScreen.tsx') },
             { path: paths.pieces, lazy: () => import('./screens/PiecesScreen.tsx') },
           ],
