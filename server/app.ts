@@ -5,6 +5,7 @@ import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
 import { makeDataSource, refuseStrongRole } from './db/data-source.ts';
 import { ENTITIES } from './entities.ts';
+import { AnswerPool } from './features/causes/answer-pool.ts';
 import { serveFeatures } from './features.ts';
 import { Api } from './http/api.ts';
 import { serveClient } from './http/client-files.ts';
@@ -50,9 +51,10 @@ export async function makeApp(config: Config, logger: Logger): Promise<LoafmarkA
   app.use('/api', (request, response, next) => (request.path.startsWith('/health/') ? next() : sessionHandler(request, response, next)));
   app.use('/api', express.json({ limit: 256 * 1024, strict: true }));
 
+  const answers = new AnswerPool();
   let stopping = false;
   const api = new Api(app, source, heavySource);
-  serveFeatures(api, { app, config, source, doorPool, logger, throttle: new Throttle(doorPool), isStopping: () => stopping });
+  serveFeatures(api, { app, config, source, doorPool, logger, throttle: new Throttle(doorPool), answers, isStopping: () => stopping });
   app.use('/api', () => {
     throw notFound('route');
   });
@@ -67,7 +69,7 @@ export async function makeApp(config: Config, logger: Logger): Promise<LoafmarkA
       stopping = true;
     },
     close: async () => {
-      await Promise.all([source.destroy(), heavySource.destroy(), doorPool.end()]);
+      await Promise.all([answers.close(), source.destroy(), heavySource.destroy(), doorPool.end()]);
     },
   };
 }

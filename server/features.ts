@@ -5,6 +5,8 @@ import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
 import { auditRoutes } from './features/audit/audit.routes.ts';
 import { batchesRoutes } from './features/batches/batches.routes.ts';
+import type { AnswerPool } from './features/causes/answer-pool.ts';
+import { causesRoutes } from './features/causes/causes.routes.ts';
 import { exportsRoutes } from './features/exports/exports.routes.ts';
 import { faultsRoutes } from './features/faults/faults.routes.ts';
 import { formulasRoutes } from './features/formulas/formulas.routes.ts';
@@ -31,6 +33,7 @@ export interface Surroundings {
   doorPool: Pool;
   logger: Logger;
   throttle: Throttle;
+  answers: AnswerPool;
   isStopping: () => boolean;
 }
 
@@ -44,6 +47,8 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   outboxRoutes(api, around.config);
   suppliersRoutes(api);
   materialsRoutes(api);
+  // Before the lots: `behaviour` is no lot's id.
+  causesRoutes(api, around.answers);
   lotsRoutes(api);
   formulasRoutes(api);
   importsRoutes(api);
