@@ -29,7 +29,7 @@ function Look({ batchId }: { batchId: string }) {
   const asked = Stage.safeParse(search.get('stage'));
   const stage = asked.success ? asked.data : (due.find((look) => look.batchId === batchId)?.stage ?? 'cut');
   return (
-    <div className="grid gap-4">
+    <div className="grid grid-cols-1 gap-4">
       <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
         <h1 className="flex items-center gap-2.5"><Slice soap={batch.palette} /><Link to={paths.batch(batchId)} className="stamp text-[1.1875rem] no-underline">{batch.code}</Link></h1>
         <p className="text-note text-ink-2">{[batch.formulaName, METHOD_WORDS[batch.method], `made ${formatDay(batch.madeOn)}`, batch.makerName].filter(Boolean).join(', ')}</p>

@@ -16,7 +16,7 @@ export function Component() {
   const now = due.data?.filter(({ standing }) => standing !== 'coming') ?? [];
   const coming = due.data?.filter(({ standing }) => standing === 'coming') ?? [];
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-1 gap-8">
       <h1>Inspect</h1>
       {due.isPending && <LoadingShape says="Counting the looks that are due" rowClassName="h-14" />}
       {due.isError && <ErrorState error={due.error} onRetry={() => void due.refetch()} />}

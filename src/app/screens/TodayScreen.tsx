@@ -34,7 +34,7 @@ export function Component() {
   const failed = [due, way, making].find((query) => query.isError);
   const isEmpty = way.isSuccess && making.isSuccess && loaves.length === 0 && open.length === 0;
   return (
-    <div className="grid gap-8">
+    <div className="grid grid-cols-1 gap-8">
       <div className="flex flex-wrap items-end justify-between gap-4">
         <div>
           <p className="text-row text-ink-2">{formatLongDay(today)}, {workshop.name}</p>
@@ -50,7 +50,7 @@ export function Component() {
           Log a batch, photograph it, mark what you see. After eight checked batches or so, Causes begins to answer.
         </EmptyState>
       ) : way.isPending ? <LoadingShape says="Setting the loaves on their shelf" rows={2} rowClassName="h-16" /> : <OnTheWay batches={loaves} due={due.data ?? []} today={today} batchAddress={paths.batch} />}
-      <div className="grid gap-9 bench:grid-cols-[minmax(0,1.7fr)_minmax(0,1fr)]">
+      <div className="grid grid-cols-1 gap-9 bench:grid-cols-[minmax(0,1.7fr)_minmax(0,1fr)]">
         <section>
           <Rail heading="Look at these" aside={due.data && (now.length > SHOWN ? `${SHOWN} of ${now.length}` : formatCount(now.length, 'look'))} />
           {due.isPending ? <LoadingShape says="Counting the looks that are due" rowClassName="h-14" /> : now.length === 0 ? <EmptyState title="Nothing is due" /> : <DueList items={now.slice(0, SHOWN)} faultName={faultName} addressOf={(look) => paths.inspectBatch(look.batchId, look.stage)} />}

@@ -22,13 +22,13 @@ export function OnTheWay({ batches, due, today, batchAddress }: { batches: reado
   const wanted = new Map(due.filter(({ standing }) => standing !== 'coming').map((look) => [look.batchId, look]));
   const bars = batches.reduce((sum, batch) => sum + (batch.bars ?? 0), 0);
   return (
-    <section aria-labelledby="way-heading" className="grid gap-1">
+    <section aria-labelledby="way-heading" className="grid grid-cols-1 gap-1">
       <Rail id="way-heading" heading="On the way" aside={`${formatCount(batches.length, 'loaf', 'loaves')}, ${formatCount(bars, 'bar')}. Pulled forward: due. Solid code: late.`} />
       <div tabIndex={0} role="region" aria-label="Loaves by age" className="flex gap-7 overflow-x-auto pb-2 pt-4">
         {STRETCHES.map(({ name, says, from, until }) => {
           const here = batches.filter((batch) => { const age = daysBetween(batch.madeOn, today); return age >= from && age < until; });
           return (
-            <div key={name} className="flex min-w-28 flex-1 flex-col">
+            <div key={name} className="flex min-w-28 shrink-0 grow flex-col">
               <ul className="flex min-h-20 flex-1 items-end gap-2.5 border-b-5 border-ink">
                 {here.map((batch) => {
                   const look = wanted.get(batch.id);
