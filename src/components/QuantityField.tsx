@@ -4,7 +4,7 @@ import { CONTROL, FieldFrame, type FieldShape } from './Field.tsx';
 
 interface QuantityFieldProps extends FieldShape {
   quantity: Quantity;
-  /** The value inside: °C, g, a fraction, or the plain number; null while empty or not a number. */
+  /** The value inside: °C, g, a fraction, or the plain number; null while empty, NaN while what is typed is no number, so that no schema takes it. */
   value: number | null;
   onChange: (value: number | null) => void;
   onBlur?: () => void;
@@ -24,18 +24,18 @@ export function numberIn(text: string): number | null | undefined {
 }
 
 function shownText(value: number | null, quantity: Quantity, units: UnitChoice, decimals: number): string {
-  return value === null ? '' : String(Number(toShown(value, quantity, units).toFixed(decimals)));
+  return value === null || Number.isNaN(value) ? '' : String(Number(toShown(value, quantity, units).toFixed(decimals)));
 }
 
 /** A measured value in the person's own unit. What was typed stays as typed; the value inside is SI. */
 export function QuantityField({ quantity, value, onChange, onBlur, units = SI, decimals = 2, name, sign, label, hint, error, warning, isOptional, className }: QuantityFieldProps) {
   const [typed, setTyped] = useState({ text: shownText(value, quantity, units, decimals), stands: value });
   // A value set from outside (a partner field, a reset) replaces what was typed; our own echo does not.
-  const text = typed.stands === value ? typed.text : shownText(value, quantity, units, decimals);
+  const text = Object.is(typed.stands, value) ? typed.text : shownText(value, quantity, units, decimals);
   const isNumber = numberIn(text) !== undefined;
   const unit = sign ?? unitSign(quantity, units);
   return (
-    <FieldFrame label={label} hint={hint} error={error ?? (isNumber ? undefined : 'Type a number, for example 38.5')} warning={warning} {...(isOptional ? { isOptional } : {})} {...(className ? { className } : {})}>
+    <FieldFrame label={label} hint={hint} error={isNumber ? error : 'Type a number, for example 38.5'} warning={warning} {...(isOptional ? { isOptional } : {})} {...(className ? { className } : {})}>
       {(ids) => (
         <span className="relative block">
           <input
@@ -48,7 +48,7 @@ export function QuantityField({ quantity, value, onChange, onBlur, units = SI, d
             onBlur={onBlur}
             onChange={(event) => {
               const shown = numberIn(event.target.value);
-              const next = shown === null || shown === undefined ? null : fromShown(shown, quantity, units);
+              const next = shown === null ? null : fromShown(shown ?? Number.NaN, quantity, units);
               setTyped({ text: event.target.value, stands: next });
               onChange(next);
             }}

@@ -32,7 +32,7 @@ export function ErrorState({ error, onRetry }: { error: unknown; onRetry?: () =>
   return (
     <div role="alert" className="grid justify-items-start gap-2 border-l-4 border-ink bg-tray px-4 py-4">
       <p className="text-rail font-[640]">{title}</p>
-      <p className="max-w-prose text-ink-2">{problem?.detail ?? (error instanceof Error ? error.message : 'Something went wrong.')} Your records are safe.</p>
+      <p className="max-w-prose text-ink-2">{(problem?.detail ?? (error instanceof Error ? error.message : 'Something went wrong')).replace(/\.$/, '')}. Your records are safe.</p>
       {problem?.instance && problem.status >= 500 && <p className="text-note text-ink-2">Reference: {problem.instance}</p>}
       {onRetry && <Block onClick={onRetry}>Try again</Block>}
     </div>

@@ -1,20 +1,10 @@
+import { BATCH_LIFE, mayPass } from '#shared/words/batch-life.ts';
 import type { BatchState } from '#shared/words/batch-words.ts';
 import type { WorkshopTransaction } from '#server/db/workshop-transaction.ts';
 import { faultCatalogue } from '#server/features/faults/catalogue.ts';
 import { conflict } from '#server/problem.ts';
 
-const LIFE: readonly BatchState[] = ['planned', 'making', 'in-mould', 'curing', 'cured', 'closed'];
 const SAFETY_FAULTS = faultCatalogue.filter((fault) => fault.kind === 'safety').map((fault) => fault.slug);
-
-/**
- * Whether a batch may pass from one state to another: forward along its life, also several steps at
- * once (a notebook is often typed in late), or abandoned from anywhere before closed. Never back.
- */
-export function mayPass(from: BatchState, to: BatchState): boolean {
-  if (from === to) return true;
-  if (from === 'closed' || from === 'abandoned') return false;
-  return to === 'abandoned' || LIFE.indexOf(to) > LIFE.indexOf(from);
-}
 
 /**
  * Refuses a step that the life of a batch does not have, and closing over an open safety finding.
@@ -23,7 +13,7 @@ export function mayPass(from: BatchState, to: BatchState): boolean {
  */
 export async function passTo(tx: WorkshopTransaction, batch: { id: string; state: BatchState }, to: BatchState): Promise<void> {
   if (!mayPass(batch.state, to)) {
-    throw conflict(`A batch that is ${batch.state} cannot become ${to}; it goes ${LIFE.join(', ')}, or is abandoned before it is closed`);
+    throw conflict(`A batch that is ${batch.state} cannot become ${to}; it goes ${BATCH_LIFE.join(', ')}, or is abandoned before it is closed`);
   }
   if (to === 'closed' && batch.state !== 'closed' && (await hasOpenSafetyFinding(tx, batch.id))) tx.require('batch.close-unsafe');
 }

@@ -5,7 +5,7 @@ import type { Stage } from '#shared/words/stages.ts';
 import type { Piece } from '#src/components/Strip.tsx';
 
 /** Stages that a batch has behind it, by its state; the looks of the cure are spread over its weeks. */
-const STAGES_DONE: Record<BatchState, readonly Stage[]> = {
+export const STAGES_DONE: Record<BatchState, readonly Stage[]> = {
   planned: [],
   making: [],
   'in-mould': ['pour'],
