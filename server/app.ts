@@ -7,6 +7,8 @@ import { makeDataSource, refuseStrongRole } from './db/data-source.ts';
 import { ENTITIES } from './entities.ts';
 import { AnswerPool } from './features/causes/answer-pool.ts';
 import { serveFeatures } from './features.ts';
+import { Decoders } from './features/photos/decoders.ts';
+import { keepSwept } from './features/photos/sweep.ts';
 import { Api } from './http/api.ts';
 import { serveClient } from './http/client-files.ts';
 import { refuseCrossSite } from './http/cross-site.ts';
@@ -16,6 +18,7 @@ import { Throttle } from './http/rate-limit.ts';
 import { requestLog } from './http/request-log.ts';
 import { sessions } from './http/session.ts';
 import { notFound } from './problem.ts';
+import { LocalPhotoStore } from './storage/local.ts';
 
 /** Longest time one analysis statement may take, ms. */
 const HEAVY_STATEMENT_MS = 30_000;
@@ -25,6 +28,8 @@ export interface LoafmarkApp {
   express: Express;
   api: Api;
   source: DataSource;
+  /** Clears away what a crash left in the photo store, now and every hour. */
+  startSweeping(): void;
   /** From now on `ready` says no. */
   startStopping(): void;
   close(): Promise<void>;
@@ -53,8 +58,10 @@ export async function makeApp(config: Config, logger: Logger): Promise<LoafmarkA
 
   const answers = new AnswerPool();
   let stopping = false;
+  let stopSweeping = () => {};
+  const photoKit = { store: new LocalPhotoStore(config.uploadsDir), decoders: new Decoders() };
   const api = new Api(app, source, heavySource);
-  serveFeatures(api, { app, config, source, doorPool, logger, throttle: new Throttle(doorPool), answers, isStopping: () => stopping });
+  serveFeatures(api, { app, config, source, doorPool, photoKit, logger, throttle: new Throttle(doorPool), answers, isStopping: () => stopping });
   app.use('/api', () => {
     throw notFound('route');
   });
@@ -65,11 +72,15 @@ export async function makeApp(config: Config, logger: Logger): Promise<LoafmarkA
     express: app,
     api,
     source,
+    startSweeping: () => {
+      stopSweeping = keepSwept(source, photoKit.store, logger);
+    },
     startStopping: () => {
       stopping = true;
     },
     close: async () => {
-      await Promise.all([answers.close(), source.destroy(), heavySource.destroy(), doorPool.end()]);
+      stopSweeping();
+      await Promise.all([answers.close(), photoKit.decoders.close(), source.destroy(), heavySource.destroy(), doorPool.end()]);
     },
   };
 }

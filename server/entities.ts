@@ -10,6 +10,7 @@ import { Inspection } from './features/inspections/inspection.entity.ts';
 import { Lot } from './features/lots/lot.entity.ts';
 import { Material } from './features/materials/material.entity.ts';
 import { Member } from './features/members/member.entity.ts';
+import { Photo } from './features/photos/photo.entity.ts';
 import { Account } from './features/session/account.entity.ts';
 import { Supplier } from './features/suppliers/supplier.entity.ts';
 import { Workshop } from './features/workshop/workshop.entity.ts';
@@ -31,6 +32,7 @@ export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   Material,
   MouldRecord,
   Member,
+  Photo,
   Supplier,
   Workshop,
 ];

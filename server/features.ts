@@ -19,6 +19,8 @@ import { membersRoutes } from './features/members/members.routes.ts';
 import { outboxRoutes } from './features/outbox/outbox.routes.ts';
 import { makeToken, tokenHash } from './features/session/one-time-token.ts';
 import { hashPassword, passwordFits, refuseWeakPassword } from './features/session/password.ts';
+import type { PhotoKit } from './features/photos/photos.service.ts';
+import { photosRoutes } from './features/photos/photos.routes.ts';
 import { sessionRoutes } from './features/session/session.routes.ts';
 import { suppliersRoutes } from './features/suppliers/suppliers.routes.ts';
 import { workshopRoutes } from './features/workshop/workshop.routes.ts';
@@ -31,6 +33,7 @@ export interface Surroundings {
   config: Config;
   source: DataSource;
   doorPool: Pool;
+  photoKit: PhotoKit;
   logger: Logger;
   throttle: Throttle;
   answers: AnswerPool;
@@ -56,6 +59,7 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   exportsRoutes(api);
   faultsRoutes(api);
   inspectionsRoutes(api);
+  photosRoutes(api, around.photoKit);
   around.app.get('/api/openapi.json', (_request, response) => {
     response.json(openApiDocument(api.served, around.config.publicUrl));
   });

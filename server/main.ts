@@ -11,6 +11,7 @@ const config = readConfig(process.env);
 const logger = pino({ level: config.logLevel, base: null, timestamp: pino.stdTimeFunctions.isoTime });
 await mkdir(config.uploadsDir, { recursive: true });
 const loafmark = await makeApp(config, logger);
+loafmark.startSweeping();
 const server = createServer({ maxHeaderSize: 16 * 1024, connectionsCheckingInterval: 5_000 }, loafmark.express);
 server.headersTimeout = 10_000;
 server.requestTimeout = 120_000;

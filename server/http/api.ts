@@ -113,6 +113,22 @@ export class Api {
   }
 
   /**
+   * Serves a file whose bytes the handler sends itself: `work` opens a transaction for what must be
+   * looked up, and none is held while a slow reader takes the bytes.
+   */
+  file<P extends AnySchema, Q extends AnySchema>(
+    entry: Endpoint<P, Q, undefined, AnySchema>,
+    handler: (asked: Asked<P, Q, undefined> & { work: Work; response: Response }) => Promise<void>,
+  ): void {
+    this.route(entry, async (request, response, now) => {
+      const member = await this.signedIn(request, entry, now);
+      const asked = parseAsked(entry, request);
+      const work: Work = (step) => this.inWorkshopFor(entry, member, request, now, step);
+      await handler({ ...asked, work, response } as never);
+    });
+  }
+
+  /**
    * Serves an upload: right first, then the file is taken in, then the handler.
    * `work` opens transactions itself, so that none is held while bytes arrive.
    */
