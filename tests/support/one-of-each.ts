@@ -1,4 +1,5 @@
 import { v7 as uuidv7 } from 'uuid';
+import { aPhoto } from './pictures.ts';
 import type { World } from './world.ts';
 
 /** One record of each kind in a workshop, by the name of the path parameter that leads to it. */
@@ -17,5 +18,6 @@ export async function recordsOfEachKind({ workshopId, owner, sql }: World): Prom
   await insert('checklist_answer', { id: uuidv7(), inspection_id: ids['inspectionId'], batch_id: ids['batchId'], fault: 'soda-ash', answer: 'found' });
   await insert('finding', { id: ids['findingId'], inspection_id: ids['inspectionId'], batch_id: ids['batchId'], fault: 'soda-ash', severity: 1 });
   await insert('import', { id: ids['importId'], file_name: 'x.csv', state: 'uploaded', encoding: 'UTF-8', delimiter: ',', content: 'batch_code,made_on,method\r\nX,2026-01-01,cold', heads: JSON.stringify(['batch_code', 'made_on', 'method']), samples: '[[],[],[]]', row_count: 1, mapping: JSON.stringify({ targets: ['batch_code', 'made_on', 'method'], units: { temperature: 'celsius', share: 'percent', day: 'year-month-day', decimal: 'point' }, create: { lots: true, formulas: true, people: true, moulds: true, colourants: true } }) });
+  await aPhoto(owner, { ids: ids['photoId'] ?? '', batchId: ids['batchId'] ?? '' });
   return { ...ids, memberId: owner.memberId };
 }
