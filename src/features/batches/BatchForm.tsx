@@ -81,7 +81,7 @@ export function BatchForm({ start, stateNow, saveWords, busyWords, onSave, notic
           {isHot && <Group heading="Cook"><CookFields /></Group>}
           <Group heading="Mould and cut"><MouldFields /></Group>
           <Group heading="Face and note"><FaceFields /></Group>
-          <div className="sticky bottom-0 z-10 grid gap-2 border-t-2 border-ink bg-board py-3 max-rack:bottom-17">
+          <div className="sticky bottom-0 z-10 grid gap-2 border-t-2 border-ink bg-board py-3 max-rack:bottom-16">
             {notice}
             <div role="alert">
               {refused && <p className="border-l-4 border-ink bg-tray px-3 py-2">{refused}</p>}

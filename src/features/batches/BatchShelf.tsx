@@ -27,7 +27,7 @@ export function BatchShelf({ batch, toLook }: { batch: AnyBatchView; toLook: (st
       <div role="region" aria-label="From the making to now" tabIndex={0} className="overflow-x-auto pb-1">
         <ol className="flex min-w-full gap-0">
           <MakingPlace batch={batch} />
-          {places.map((place) => <StagePlace key={place.stage} place={place} to={toLook(place.stage)} />)}
+          {places.map((place) => <StagePlace key={place.stage} place={place} to={toLook(place.stage)} arePhotosRead={!photos.isError} />)}
           <li aria-hidden="true" className="flex min-w-2 flex-1 flex-col"><span className="h-28" /><span className="h-1.5 bg-ink" /></li>
         </ol>
       </div>
@@ -57,7 +57,7 @@ function MakingPlace({ batch }: { batch: AnyBatchView }) {
   );
 }
 
-function StagePlace({ place, to }: { place: ShelfPlace; to: string }) {
+function StagePlace({ place, to, arePhotosRead }: { place: ShelfPlace; to: string; arePhotosRead: boolean }) {
   const nameOf = useFaultName();
   const { workshop } = useSession();
   const photo = place.photos[0];
@@ -71,7 +71,7 @@ function StagePlace({ place, to }: { place: ShelfPlace; to: string }) {
             {place.photos.length > 1 && <span className="absolute bottom-0 right-0 bg-ink px-1.5 text-note text-on-ink">{place.photos.length} photos</span>}
           </Link>
         ) : (
-          <p className="grid h-full place-items-center border border-dashed border-line-firm p-2 text-center text-note text-ink-2">{last ? 'no photo taken' : 'missed; kept as not looked at'}</p>
+          <p className="grid h-full place-items-center border border-dashed border-line-firm p-2 text-center text-note text-ink-2">{last ? (arePhotosRead ? 'no photo taken' : 'photo not read') : 'missed; kept as not looked at'}</p>
         )}
       </div>
       <div className="h-1.5 bg-ink" />
