@@ -1,13 +1,15 @@
 import { Camera, LayoutGrid, List, MoreHorizontal, Moon, Sun } from 'lucide-react';
-import { useMemo, useState } from 'react';
+import { useEffect, useMemo, useState } from 'react';
 import { Link, NavLink, Outlet, useNavigate } from 'react-router-dom';
-import { useKeys } from '#src/lib/keys.ts';
+import { useSession } from '#src/features/session/session.queries.ts';
+import { setSingleKeys, useKeys } from '#src/lib/keys.ts';
 import { setRoom, useRoom } from '#src/lib/room.ts';
 import { BENCH, DESK } from './navigation.ts';
 import { FindField } from './FindField.tsx';
 import { KeyList } from './KeyList.tsx';
 import { paths } from './paths.ts';
 import { PersonMenu } from './PersonMenu.tsx';
+import { SignedOutNotice } from './SignedOutNotice.tsx';
 
 const BAR = 'flex h-9.5 shrink-0 items-center whitespace-nowrap bg-board px-3 text-row font-[500] no-underline shadow-[inset_0_1px_var(--color-edge-lit),inset_1px_0_var(--color-edge-lit)] hover:bg-tray aria-[current=page]:z-10 aria-[current=page]:-mb-2 aria-[current=page]:h-11.5 aria-[current=page]:rounded-b-bar aria-[current=page]:bg-ink aria-[current=page]:font-[620] aria-[current=page]:text-on-ink aria-[current=page]:shadow-none max-bench:aria-[current=page]:mb-0 max-bench:h-12 max-bench:aria-[current=page]:h-12';
 
@@ -55,6 +57,8 @@ export function Shell() {
     '?': () => setKeysOpen(true),
   }), [navigate]);
   useKeys(keys);
+  const { singleKeys } = useSession().account;
+  useEffect(() => setSingleKeys(singleKeys), [singleKeys]);
   return (
     <>
       <header className="no-print relative z-10 grid grid-cols-[auto_minmax(0,1fr)_auto] items-end gap-x-6 bg-board-deep px-5 max-bench:grid-cols-[minmax(0,1fr)_auto] max-rack:px-4">
@@ -84,6 +88,7 @@ export function Shell() {
           ))}
         </nav>
       )}
+      <SignedOutNotice />
       <KeyList isOpen={areKeysOpen} onClose={() => setKeysOpen(false)} />
     </>
   );

@@ -38,6 +38,7 @@ export function makeRouter(client: QueryClient) {
             { path: paths.newBatch(), lazy: () => import('./screens/BatchFormScreen.tsx') },
             { path: paths.batch(':batchId'), lazy: () => import('./screens/BatchScreen.tsx') },
             { path: paths.changeBatch(':batchId'), lazy: () => import('./screens/BatchFormScreen.tsx') },
+            { path: paths.workshop, lazy: () => import('./screens/WorkshopScreen.tsx') },
             { path: paths.pieces, lazy: () => import('./screens/PiecesScreen.tsx') },
           ],
         },

@@ -1,5 +1,6 @@
-import { QueryClient } from '@tanstack/react-query';
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query';
 import { CallProblem, NoReception } from './call.ts';
+import { saySignedOut } from './signed-out.ts';
 
 /** What else a deed on a feature's records touches; keys are the features' names, first part of every query key. */
 const TOUCHES: Record<string, readonly string[]> = {
@@ -27,8 +28,14 @@ function isWorthTrying(failures: number, error: unknown): boolean {
   return error instanceof NoReception || (error instanceof CallProblem && error.status === 503);
 }
 
+function noteRefusal(error: unknown): void {
+  if (error instanceof CallProblem && error.status === 401) saySignedOut();
+}
+
 export function makeQueryClient(): QueryClient {
   return new QueryClient({
+    queryCache: new QueryCache({ onError: noteRefusal }),
+    mutationCache: new MutationCache({ onError: noteRefusal }),
     defaultOptions: {
       queries: { staleTime: 15_000, retry: isWorthTrying, retryDelay: (attempt) => Math.min(8_000, 600 * 2 ** attempt) * (0.7 + Math.random() * 0.6), refetchOnWindowFocus: true },
       mutations: { retry: false },
