@@ -1,5 +1,5 @@
 import type { AuditEntry } from '#shared/audit.ts';
-import { formatInstant } from '#src/lib/format.ts';
+import { formatCount, formatInstant } from '#src/lib/format.ts';
 import { calledIn, changesIn, deedWords, tableWords, type FieldChange } from './trail-words.ts';
 
 /** Changes shown before the rest is folded away. */
@@ -30,7 +30,7 @@ export function TrailEntry({ entry, timeZone, onRecord }: { entry: AuditEntry; t
         )}
         {changes.length > SHOWN && (
           <details className="text-note text-ink-2">
-            <summary className="w-fit underline underline-offset-3">{changes.length - SHOWN} more fields</summary>
+            <summary className="w-fit underline underline-offset-3">{formatCount(changes.length - SHOWN, 'more field')}</summary>
             <ul>{changes.slice(SHOWN).map((change) => <Change key={change.field} change={change} deed={entry.deed} />)}</ul>
           </details>
         )}

@@ -36,6 +36,7 @@ export interface FieldChange {
 
 function asText(value: unknown): string {
   if (value === null || value === undefined || value === '') return 'nothing';
+  if (Array.isArray(value) && value.every((item) => typeof item !== 'object')) return value.join(', ').slice(0, 120) || 'nothing';
   if (typeof value === 'object') return JSON.stringify(value).slice(0, 120);
   return String(value).slice(0, 120);
 }

@@ -46,12 +46,12 @@ export function People() {
   const open = isOwner ? (row: Row) => setOpened({ ...row, email: row.email ?? null }) : undefined;
   return (
     <div className="grid gap-6">
-      <section className="grid gap-4">
+      <section className="grid max-w-5xl gap-4">
         <Rail heading="People" aside={formatCount(data.filter(({ hasEnded }) => !hasEnded).length, 'person', 'people')} />
         {isOwner && <Block kind="main" className="justify-self-start" onClick={() => setInviting(true)}>Invite somebody</Block>}
         <DataTable<Row> label="People of the workshop" columns={columns(open)} rows={data} rowId={({ id }) => id} {...(open ? { onOpen: open } : {})} columnClass={{ standing: 'max-rack:hidden' }} />
       </section>
-      <section className="grid gap-2">
+      <section className="grid max-w-5xl gap-2.5">
         <Rail heading="What each role may do" level={3} />
         <dl className="grid grid-cols-[7rem_minmax(0,1fr)] gap-y-1.5">
           {(['owner', 'maker', 'inspector', 'viewer'] as const).map((role) => (
