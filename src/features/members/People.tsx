@@ -49,7 +49,7 @@ export function People() {
       <section className="grid max-w-5xl gap-4">
         <Rail heading="People" aside={formatCount(data.filter(({ hasEnded }) => !hasEnded).length, 'person', 'people')} />
         {isOwner && <Block kind="main" className="justify-self-start" onClick={() => setInviting(true)}>Invite somebody</Block>}
-        <DataTable<Row> label="People of the workshop" columns={columns(open)} rows={data} rowId={({ id }) => id} {...(open ? { onOpen: open } : {})} columnClass={{ standing: 'max-rack:hidden' }} />
+        <DataTable<Row> label="People of the workshop" columns={columns(open)} rows={data} rowId={({ id }) => id} {...(open ? { onOpen: open } : {})} columnClass={{ email: 'max-rack:hidden', standing: 'max-rack:hidden' }} />
       </section>
       <section className="grid max-w-5xl gap-2.5">
         <Rail heading="What each role may do" level={3} />
