@@ -5,6 +5,7 @@ import { MouldRecord } from './features/batches/mould.entity.ts';
 import { Formula, FormulaLine, FormulaVersion } from './features/formulas/formula.entity.ts';
 import { Import } from './features/imports/import.entity.ts';
 import { LotStandingChangeRow } from './features/lots/lot-standing-change.entity.ts';
+import { Claim } from './features/claims/claim.entity.ts';
 import { Finding } from './features/inspections/finding.entity.ts';
 import { Inspection } from './features/inspections/inspection.entity.ts';
 import { Lot } from './features/lots/lot.entity.ts';
@@ -20,6 +21,7 @@ export const ENTITIES: EntityTarget<ObjectLiteral>[] = [
   Account,
   Batch,
   BatchIngredient,
+  Claim,
   CookStageRow,
   Finding,
   Formula,

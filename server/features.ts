@@ -7,6 +7,7 @@ import { auditRoutes } from './features/audit/audit.routes.ts';
 import { batchesRoutes } from './features/batches/batches.routes.ts';
 import type { AnswerPool } from './features/causes/answer-pool.ts';
 import { causesRoutes } from './features/causes/causes.routes.ts';
+import { claimsRoutes } from './features/claims/claims.routes.ts';
 import { exportsRoutes } from './features/exports/exports.routes.ts';
 import { faultsRoutes } from './features/faults/faults.routes.ts';
 import { formulasRoutes } from './features/formulas/formulas.routes.ts';
@@ -57,6 +58,7 @@ export function serveFeatures(api: Api, around: Surroundings): void {
   importsRoutes(api);
   batchesRoutes(api);
   exportsRoutes(api);
+  claimsRoutes(api);
   faultsRoutes(api);
   inspectionsRoutes(api);
   photosRoutes(api, around.photoKit);

@@ -19,5 +19,6 @@ export async function recordsOfEachKind({ workshopId, owner, sql }: World): Prom
   await insert('finding', { id: ids['findingId'], inspection_id: ids['inspectionId'], batch_id: ids['batchId'], fault: 'soda-ash', severity: 1 });
   await insert('import', { id: ids['importId'], file_name: 'x.csv', state: 'uploaded', encoding: 'UTF-8', delimiter: ',', content: 'batch_code,made_on,method\r\nX,2026-01-01,cold', heads: JSON.stringify(['batch_code', 'made_on', 'method']), samples: '[[],[],[]]', row_count: 1, mapping: JSON.stringify({ targets: ['batch_code', 'made_on', 'method'], units: { temperature: 'celsius', share: 'percent', day: 'year-month-day', decimal: 'point' }, create: { lots: true, formulas: true, people: true, moulds: true, colourants: true } }) });
   await aPhoto(owner, { ids: ids['photoId'] ?? '', batchId: ids['batchId'] ?? '' });
+  await insert('claim', { id: ids['claimId'], number: 1, supplier_id: ids['supplierId'], title: 'Wall test', lot_ids: `{${ids['lotId']}}`, faults: '{ricing}' });
   return { ...ids, memberId: owner.memberId };
 }

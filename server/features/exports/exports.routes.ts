@@ -3,7 +3,7 @@ import { exportsApi } from '#shared/exports.ts';
 import { batchHistoryPages } from '#server/features/batches/history.read.ts';
 import { faultCatalogue } from '#server/features/faults/catalogue.ts';
 import type { Api } from '#server/http/api.ts';
-import { sendCsv } from './csv.ts';
+import { sendCsv } from '#server/http/csv.ts';
 
 const FAULTS = faultCatalogue.map((fault) => fault.slug);
 
