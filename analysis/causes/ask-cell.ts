@@ -100,7 +100,8 @@ export function askCell(bench: Bench, faultBench: FaultBench, column: Column): A
   const { eligible, onThePath } = candidatesFor(column, bench.columns, faultBench.fault);
   cell.onThePath = onThePath;
   const tied = [...neverMeets(bench, counts, column), ...movesWith(bench, column, eligible)];
-  if (tied.length > 0) return cannotBeTold(asked, tied);
+  // Three or four batches that share nothing with the others are above all few.
+  if (tied.length > 0) return Math.min(cell.exposedN, cell.unexposedN) < CONFINED_FROM ? asked : cannotBeTold(asked, tied);
 
   const given = column.term.input === 'methodFamily' ? 'plain' : 'within';
   const chosen = chooseAdjusters(bench, column, eligible, (other) => faultBench.withFault(other, given), Math.min(counts.events, counts.n - counts.events));

@@ -37,7 +37,7 @@ export function faultBench(bench: Bench, sparse: SparseRows, fault: FaultSpec): 
     if (value > 0) events++;
   }
   const decidable = Math.min(events, checked - events) >= DECIDABLE;
-  const effects: LotEffects = decidable ? lotEffects(sparse, outcome, (column) => takesPart(column, fault)) : new Map();
+  const effects: LotEffects = decidable ? lotEffects(sparse, outcome, (column) => takesPart(column, fault), (column) => fault.suspects.some(({ input }) => input === column.term.input)) : new Map();
   const offset = new Float64Array(bench.n);
   for (const [column, effect] of effects) for (let i = 0; i < bench.n; i++) if (column.values[i] === 1) offset[i]! += effect;
   return { fault, outcome, checked, events, withFault: correlationWithFault(bench, outcome), offset, effects };

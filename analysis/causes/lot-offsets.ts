@@ -12,6 +12,8 @@ const MOST_LOTS = 200;
 /** Prior variances of the log odds (our rule): method 9, each lot 1, all else 0.25 on its standardised value. */
 const METHOD_VARIANCE = 9;
 const LOT_VARIANCE = 1;
+/** A kind of lot the trade does not suspect of the fault gets less: it is mostly a period of the calendar, and would take from the lot to blame. */
+const UNSUSPECTED_LOT_VARIANCE = 0.05;
 const TERM_VARIANCE = 0.25;
 
 /** In a large workshop a lot's effect is rounded to this, so that equal rows collapse; it is far below its uncertainty. */
@@ -67,18 +69,20 @@ function variance(column: Column): number {
  *
  * @param outcome 1 found, 0 clear, −1 not checked, one a batch
  * @param allowed whether a term may take part: known in time and not come about by itself
+ * @param suspected whether the trade names a lot of this kind among the usual suspects of the fault
  *
  * Source: ridge logistic regression, S. le Cessie and H. van Houwelingen, Appl. Stat. 41 (1992) 191; prior variances are our rule.
  * Cost: O(checked · non-zero²  + terms³) a Newton step.
  */
-export function lotEffects(rows: SparseRows, outcome: Int8Array, allowed: (column: Column) => boolean): LotEffects {
+export function lotEffects(rows: SparseRows, outcome: Int8Array, allowed: (column: Column) => boolean, suspected: (column: Column) => boolean): LotEffects {
+  const precision = rows.precision.map((own, term) => (rows.isLot[term - 2] && !suspected(rows.columns[term - 2]!) ? 1 / UNSUSPECTED_LOT_VARIANCE : own));
   const active = [0, 1, ...rows.columns.flatMap((column, j) => (allowed(column) ? [j + 2] : []))];
   const index = new Int32Array(rows.columns.length + 2).fill(-1);
   for (const [k, term] of active.entries()) index[term] = k;
   const p = active.length;
   const beta = new Float64Array(p);
   const effects = new Map<Column, number>();
-  if (rows.isLot.some((isLot, j) => isLot && index[j + 2]! >= 0)) climb(rows, outcome, active, index, beta);
+  if (rows.isLot.some((isLot, j) => isLot && index[j + 2]! >= 0)) climb({ ...rows, precision }, outcome, active, index, beta);
   for (const [j, column] of rows.columns.entries()) if (rows.isLot[j] && index[j + 2]! >= 0) {
     const effect = beta[index[j + 2]!]!;
     effects.set(column, outcome.length > EXACT_NUMBERS_UP_TO ? Math.round(effect / OFFSET_STEP) * OFFSET_STEP : effect);

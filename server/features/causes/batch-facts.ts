@@ -50,11 +50,14 @@ export function seasonOf(day: string): (typeof SEASONS)[number] {
   return SEASONS[Math.floor((Number(day.slice(5, 7)) % 12) / 3)] ?? 'dec-feb';
 }
 
-/** Why the analysis does not count a batch; rebatch it leaves out by itself. */
+/**
+ * Why the analysis does not count a batch; rebatch it leaves out by itself. A batch given up counts for what was
+ * answered about it: leaving out those that seized in the pot would acquit the lot that did it.
+ */
 function leftOut({ state, outcomes }: BatchFacts): string | undefined {
-  if (state === 'abandoned') return 'abandoned';
   if (state === 'planned') return 'not-made-yet';
-  return state === 'making' && Object.keys(outcomes).length === 0 ? 'not-made-yet' : undefined;
+  if (Object.keys(outcomes).length > 0) return undefined;
+  return state === 'abandoned' ? 'abandoned' : state === 'making' ? 'not-made-yet' : undefined;
 }
 
 /** A share as per cent, without the dust of binary fractions. */
