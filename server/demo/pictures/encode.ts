@@ -21,10 +21,11 @@ export async function encodePicture(pixels: Buffer, wish: PictureWish): Promise<
   const raw = sharp(pixels, { raw: { width: pictureWidth, height: pictureHeight, channels: 3 } });
   const { data, info } = await (degrees === 0 ? raw : raw.rotate(degrees))
     .withExif({
-      IFD0: { Make: make, Model: model.join(' '), Orientation: String(orientation), DateTime: taken },
+      IFD0: { Make: make, Model: model.join(' '), DateTime: taken },
       IFD2: { DateTimeOriginal: taken, OffsetTimeOriginal: wish.offset, DateTimeDigitized: taken },
       ...(random.chance(0.07) ? place : {}),
     })
+    .withMetadata({ orientation })
     .jpeg({ quality: 84, chromaSubsampling: '4:2:0' })
     .toBuffer({ resolveWithObject: true });
   return { jpeg: data, width: info.width, height: info.height };

@@ -109,7 +109,9 @@ function veinTable(): Float32Array {
       for (let j = -1; j <= 1; j += 1) {
         for (let i = -1; i <= 1; i += 1) {
           const point = points[((cy + j + cells) % cells) * cells + ((cx + i + cells) % cells)] as { x: number; y: number };
-          const distance = Math.hypot((cx + i) * size + point.x - x, (cy + j) * size + point.y - y);
+          const away = (cx + i) * size + point.x - x;
+          const beside = (cy + j) * size + point.y - y;
+          const distance = Math.sqrt(away * away + beside * beside);
           if (distance < first) { second = first; first = distance; } else if (distance < second) second = distance;
         }
       }

@@ -117,7 +117,8 @@ export const chalky: FaultPainter = (pass) => {
   const { raster, look, severity, scale } = pass;
   lay(pass, (k, x, y, _depth, reach) => {
     const dry = smooth(0.2, 0.7, look.noise.cloud(x * 0.4, y * 0.4)) * reach;
-    const hair = smooth(0.035, 0.01, look.otherNoise.veins(x / scale, y / scale)) * reach;
+    const bend = look.noise.cloud(x / scale, y / scale) * 60;
+    const hair = smooth(0.03, 0.008, look.otherNoise.veins(x / scale * 0.8 + bend, y / scale * 0.8 + bend * 0.6)) * smooth(0.3, 0.6, dry) * reach;
     tint(raster, k, [0.8, 0.79, 0.76], dry * 0.16 * severity);
     stain(raster, k, [0.6, 0.56, 0.5], hair * 0.5);
     raise(raster, k, -hair * 2);

@@ -8,7 +8,7 @@ const rustDeep = linear('#7d3a0c');
 /** Tan to dark brown wherever the scent is, from the surface inwards; deepens over the weeks. */
 export const vanillaBrowning: FaultPainter = (pass) => {
   const { raster, body, look, severity, ageDays, scale, offset } = pass;
-  const grown = 0.55 + 0.45 * smooth(0, 24, ageDays);
+  const grown = 0.74 + 0.26 * smooth(0, 24, ageDays);
   const depthOf = (([0.36, 0.62, 0.86] as const)[severity - 1] as number) * grown;
   lay(pass, (k, x, y, depth, reach) => {
     const u = (x + offset) / scale;
@@ -56,6 +56,17 @@ export const colourBleed: FaultPainter = (pass) => {
       : smooth(0.3, 0.75, look.noise.cloud(u * 0.3, v * 0.3)) * (0.5 + 0.5 * combed(look, u, v).share);
     tint(raster, k, look.second, blot * strength * reach * 0.8);
     return blot * reach;
+  });
+};
+
+/** A wedge of the second colour where the design has none: the pour went another way. */
+export const designDiffers: FaultPainter = (pass) => {
+  const { raster, body, look, severity, scale, offset } = pass;
+  lay(pass, (k, x, y, _depth, reach) => {
+    const edge = y * 0.8 - x * 0.5 + (look.noise.cloud((x + offset) * 0.5 / scale, y * 0.5 / scale) - 0.5) * 70 * scale;
+    const wedge = smooth(-2, 2, edge - (30 - 18 * severity) * scale) * smooth(body.halfHeight * 0.98, body.halfHeight * 0.9, Math.abs(y)) * reach;
+    tint(raster, k, look.second, wedge * 0.78);
+    return wedge;
   });
 };
 

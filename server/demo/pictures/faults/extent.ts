@@ -19,6 +19,16 @@ export class Extent {
     this.#rows[y] = (this.#rows[y] as number) + share;
   }
 
+  /** How much of the fault shows, in pixels weighed by how plainly. */
+  get amount(): number {
+    return this.#rows.reduce((sum, w) => sum + w, 0);
+  }
+
+  include(other: Extent): void {
+    other.#columns.forEach((w, i) => { this.#columns[i] = (this.#columns[i] as number) + w; });
+    other.#rows.forEach((w, i) => { this.#rows[i] = (this.#rows[i] as number) + w; });
+  }
+
   /** Box that holds nearly all of the fault, in shares of the picture; undefined when it shows nowhere. */
   box(): { x: number; y: number; width: number; height: number } | undefined {
     const across = middle(this.#columns);

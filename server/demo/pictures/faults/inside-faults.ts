@@ -34,6 +34,7 @@ export const ricing: FaultPainter = (pass) => {
   const grains = scatter(pass, Math.round(area * (([46, 120, 260] as const)[severity - 1] as number)), (r) => scale * (1.3 + 2.7 * r.unit() ** 1.6));
   stamp(pass, grains, (k, from) => {
     const grain = smooth(1.12, 0.78, from);
+    stain(raster, k, [0.72, 0.68, 0.6], smooth(1.5, 1.15, from) * (1 - grain) * 0.6);
     tint(raster, k, pale, grain * 0.9);
     raise(raster, k, grain * (0.7 + 0.3 * severity));
     shine(raster, k, 0.03, grain);
@@ -50,6 +51,7 @@ export const stearicSpots: FaultPainter = (pass) => {
   for (const dot of dots) dot.roundness = 0.95;
   stamp(pass, dots, (k, from) => {
     const dot = smooth(1.15, 0.85, from);
+    stain(raster, k, [0.7, 0.67, 0.6], Math.exp(-(((from - 1.15) / 0.18) ** 2)) * 0.7);
     tint(raster, k, wax, dot * 0.86);
     shine(raster, k, 0.3, dot);
     return dot;

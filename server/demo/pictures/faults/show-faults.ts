@@ -23,7 +23,7 @@ const inOutline: FaultPainter = (pass) => lay(pass, (k, _x, _y, depth) => {
 
 /** In the order they are laid over each other: what is in the mass first, films and liquids last. Smells show nowhere. */
 const painters: readonly (readonly [CatalogueSlug, FaultPainter])[] = [
-  ['uneven-bars', inOutline], ['warping', inOutline], ['colour-shift', colour.colourShift], ['colour-bleed', colour.colourBleed], ['design-differs', colour.colourBleed],
+  ['uneven-bars', inOutline], ['warping', inOutline], ['colour-shift', colour.colourShift], ['colour-bleed', colour.colourBleed], ['design-differs', colour.designDiffers],
   ['vanilla-browning', colour.vanillaBrowning], ['partial-gel-ring', inside.partialGelRing], ['acceleration', body.acceleration], ['seizing', body.seizing],
   ['volcano', body.volcano], ['separation', body.separation], ['heat-tunnels', inside.heatTunnels], ['glycerin-rivers', inside.glycerinRivers],
   ['stearic-spots', inside.stearicSpots], ['ricing', inside.ricing], ['colour-specks', colour.colourSpecks], ['embed-detachment', body.embedDetachment],
@@ -39,23 +39,39 @@ export const visibleFaults: readonly CatalogueSlug[] = painters.map(([fault]) =>
 interface Showing { raster: Raster; wish: PictureWish; look: Look; scene: Scene; placed: readonly Placed[] }
 
 /** Lays every wished fault over the bars that carry it and says where each can be seen. */
-export function showFaults({ raster, wish, look, placed }: Showing): Region[] {
+export function showFaults({ raster, wish, look, scene, placed }: Showing): Region[] {
   const regions: Region[] = [];
   for (const [fault, paint] of painters) {
     const shown = wish.shows.find((one) => one.fault === fault);
     if (!shown) continue;
-    const extent = new Extent(raster.width, raster.height);
+    const extents: (Extent | undefined)[] = [];
     const carries = new Set(shown.bars);
     for (const one of placed) {
+      extents.push(undefined);
       if (one.body.bar > 0 && carries.size > 0 && !carries.has(one.body.bar)) continue;
       // A fault of one loaf looks alike at each stage: its draws hang on the bar, not on the picture.
       const random = randomOf(7, 'fault', wish.code, fault, one.body.bar);
+      const extent = new Extent(raster.width, raster.height);
+      extents[extents.length - 1] = extent;
       paint({ raster, ...one, look, severity: shown.severity, ageDays: wish.ageDays, random, reach: reachOf(one.body, carries, wish.bars), extent });
     }
-    const box = extent.box();
+    const box = clearest(extents, scene === 'tops')?.box();
     if (box) regions.push({ fault, ...box });
   }
   return regions;
+}
+
+/** Where to point: the bar that shows the fault best, with its neighbours in an unbroken run when bars lie side by side. */
+function clearest(extents: readonly (Extent | undefined)[], isRun: boolean): Extent | undefined {
+  const amounts = extents.map((extent) => extent?.amount ?? 0);
+  const most = Math.max(0, ...amounts);
+  const best = amounts.indexOf(most);
+  const middle = extents[best];
+  if (!middle || most === 0 || !isRun) return middle;
+  for (const step of [-1, 1]) {
+    for (let i = best + step; (amounts[i] ?? 0) > most * 0.2; i += step) middle.include(extents[i] as Extent);
+  }
+  return middle;
 }
 
 /** On an uncut loaf a fault fades out at the sides of the bars that will carry it. */

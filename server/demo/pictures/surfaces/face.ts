@@ -51,8 +51,8 @@ function designOf(look: Look): (u: number, v: number) => Colour {
   if (look.design === 'specks') {
     return (u, v) => {
       const clump = smooth(0.25, 0.8, noise.cloud(u * 0.6, v * 0.6));
-      const dark = smooth(0.915, 0.965, otherNoise.grain(u * 0.8, v * 0.8)) * (0.35 + 0.65 * clump);
-      const pale = smooth(0.93, 0.97, noise.grain(u * 0.55 + 90, v * 0.55));
+      const dark = smooth(0.915, 0.965, otherNoise.grain(u * 0.66 + v * 0.43, v * 0.66 - u * 0.43)) * (0.35 + 0.65 * clump);
+      const pale = smooth(0.93, 0.97, noise.grain(u * 0.47 - v * 0.29, v * 0.47 + u * 0.29));
       return mix(mix(base, shadeOf(second, 0.8), dark), third, pale * 0.55);
     };
   }

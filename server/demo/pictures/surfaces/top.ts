@@ -39,7 +39,7 @@ export function paintTop(raster: Raster, body: Body, look: Look, offset: number)
       : (noise.cloud(u * 0.7, y * 0.7) - 0.5) * 4.4 + (otherNoise.cloud(u * 2, y * 2) - 0.5) * 1.1;
     raster.z[k] = body.thickness + round * 6 + (stroke.height * relief + lumps) * (0.35 + 0.65 * middle) + middle * 9 + (noise.grain(x, y) - 0.5) * 0.25;
     let colour = isPlain ? mix(look.base, look.third, stroke.height * 0.3) : mix(mix(look.base, look.second, stroke.share * 0.94), look.third, stroke.thread * 0.7);
-    if (specksIn) colour = mix(colour, dark, smooth(0.9, 0.96, otherNoise.grain(u * 0.7, y * 0.7)) * smooth(0.3, 0.7, noise.cloud(u * 0.5, y * 0.5)));
+    if (specksIn) colour = mix(colour, dark, smooth(0.9, 0.96, otherNoise.grain(u * 0.58 + y * 0.38, y * 0.58 - u * 0.38)) * smooth(0.3, 0.7, noise.cloud(u * 0.5, y * 0.5)));
     const worn = 1 + (otherNoise.cloud(u * 1.6 + 40, y * 1.6) - 0.5) * (look.isRough ? 0.2 : 0.08);
     put(raster, k, [colour[0] * worn, colour[1] * worn, colour[2] * worn], look.gloss * 0.9, body.mark);
   });
