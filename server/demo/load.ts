@@ -4,6 +4,7 @@ import { addDays } from '#shared/units/days.ts';
 import { quernbyLoft } from './history/quernby.ts';
 import { saltmarshKettle } from './history/saltmarsh.ts';
 import type { WorkshopHistory } from './history/types.ts';
+import { loadPhotos } from './load-photos.ts';
 import { batchRows } from './rows/batch-rows.ts';
 import { insertRows } from './rows/insert.ts';
 import { idAt, Keys } from './rows/keys.ts';
@@ -26,7 +27,7 @@ export interface LoadDemo {
  *
  * @param ownerUrl address of the role that owns the tables
  */
-export async function loadDemo(ownerUrl: string, { today, report }: LoadDemo): Promise<{ loaded: boolean }> {
+export async function loadDemo(ownerUrl: string, { today, report, uploadsDir }: LoadDemo): Promise<{ loaded: boolean }> {
   const client = new Client({ connectionString: ownerUrl, application_name: 'loafmark demo' });
   await client.connect();
   try {
@@ -35,7 +36,7 @@ export async function loadDemo(ownerUrl: string, { today, report }: LoadDemo): P
     const passwordHash = await hashPassword(demoPassword);
     for (const history of [quernbyLoft(today), saltmarshKettle(today)]) {
       report(`${history.name}: ${history.batches.length} batches`);
-      await loadWorkshop(client, history, passwordHash);
+      await loadWorkshop(client, history, passwordHash, { uploadsDir, report });
     }
     return { loaded: true };
   } finally {
@@ -43,7 +44,7 @@ export async function loadDemo(ownerUrl: string, { today, report }: LoadDemo): P
   }
 }
 
-async function loadWorkshop(client: Client, history: WorkshopHistory, passwordHash: string): Promise<void> {
+async function loadWorkshop(client: Client, history: WorkshopHistory, passwordHash: string, around: Pick<LoadDemo, 'uploadsDir' | 'report'>): Promise<void> {
   const opened = `${addDays(history.startsOn, -90)}T08:00:00Z`;
   const workshopId = idAt(opened);
   const keys = new Keys();
@@ -64,6 +65,7 @@ async function loadWorkshop(client: Client, history: WorkshopHistory, passwordHa
     for (const rows of [...stockRows(history, keys), ...batchRows(history, keys), ...lookRows(history, keys)]) {
       await insertRows(client, workshopId, rows);
     }
+    await loadPhotos(client, { workshopId, history, keys, ...around });
     await client.query('commit');
   } catch (error) {
     await client.query('rollback');

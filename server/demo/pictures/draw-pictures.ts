@@ -9,6 +9,12 @@ export interface DrawPictures {
   onDone: (at: number, picture: Picture) => void | Promise<void>;
 }
 
+/** A thread does not always get its parent's TypeScript loader, so each starts its own. */
+const startTypeScript = `
+  const { workerData } = require('node:worker_threads');
+  import('tsx/esm/api').then(({ tsImport }) => tsImport(workerData, workerData));
+`;
+
 type Answer = { at: number; picture: Picture } | { at: number; failure: string };
 
 /**
@@ -18,7 +24,7 @@ type Answer = { at: number; picture: Picture } | { at: number; failure: string }
  */
 export async function drawPictures(wishes: readonly PictureWish[], { workers, onDone }: DrawPictures): Promise<void> {
   let next = 0;
-  const threads = Array.from({ length: Math.max(1, Math.min(workers, wishes.length)) }, () => new Worker(new URL('picture-worker.ts', import.meta.url), { execArgv: ['--import', 'tsx'] }));
+  const threads = Array.from({ length: Math.max(1, Math.min(workers, wishes.length)) }, () => new Worker(startTypeScript, { eval: true, workerData: new URL('picture-worker.ts', import.meta.url).href }));
   try {
     await Promise.all(threads.map((thread) => new Promise<void>((resolve, reject) => {
       const sendNext = () => {
