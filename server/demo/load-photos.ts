@@ -9,7 +9,7 @@ import { insertRows } from './rows/insert.ts';
 import { idAt, type Keys } from './rows/keys.ts';
 import { lookKey } from './rows/look-rows.ts';
 
-interface Loading { workshopId: string; history: WorkshopHistory; keys: Keys; uploadsDir: string; report: (line: string) => void }
+interface Loading { workshopId: string; history: WorkshopHistory; keys: Keys; uploadsDir: string; mostPhotos?: number; report: (line: string) => void }
 
 type Row = Record<string, unknown>;
 
@@ -17,9 +17,10 @@ type Row = Record<string, unknown>;
 const workers = 2;
 
 /** Draws the photos of a story, puts them into the store, and writes their rows and the marks on them. */
-export async function loadPhotos(client: Client, { workshopId, history, keys, uploadsDir, report }: Loading): Promise<void> {
+export async function loadPhotos(client: Client, { workshopId, history, keys, uploadsDir, mostPhotos, report }: Loading): Promise<void> {
   const store = new LocalPhotoStore(uploadsDir);
-  const wanted = history.batches.flatMap((batch) => batch.photos.map((photo) => ({ batch, photo, wish: pictureWish(batch, photo), id: idAt(photo.takenAt) })));
+  const photos = history.batches.flatMap((batch) => batch.photos.map((photo) => ({ batch, photo, wish: pictureWish(batch, photo), id: idAt(photo.takenAt) })));
+  const wanted = photos.slice(0, mostPhotos);
   const photoRows: Row[] = [];
   const markRows: Row[] = [];
   await drawPictures(wanted.map(({ wish }) => wish), {

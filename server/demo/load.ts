@@ -19,6 +19,8 @@ export interface LoadDemo {
   today: string;
   report: (line: string) => void;
   uploadsDir: string;
+  /** At most so many photos of each workshop; all of them when absent. */
+  mostPhotos?: number;
 }
 
 /**
@@ -27,7 +29,7 @@ export interface LoadDemo {
  *
  * @param ownerUrl address of the role that owns the tables
  */
-export async function loadDemo(ownerUrl: string, { today, report, uploadsDir }: LoadDemo): Promise<{ loaded: boolean }> {
+export async function loadDemo(ownerUrl: string, { today, ...around }: LoadDemo): Promise<{ loaded: boolean }> {
   const client = new Client({ connectionString: ownerUrl, application_name: 'loafmark demo' });
   await client.connect();
   try {
@@ -35,8 +37,8 @@ export async function loadDemo(ownerUrl: string, { today, report, uploadsDir }: 
     if (rows[0]?.taken) return { loaded: false };
     const passwordHash = await hashPassword(demoPassword);
     for (const history of [quernbyLoft(today), saltmarshKettle(today)]) {
-      report(`${history.name}: ${history.batches.length} batches`);
-      await loadWorkshop(client, history, passwordHash, { uploadsDir, report });
+      around.report(`${history.name}: ${history.batches.length} batches`);
+      await loadWorkshop(client, history, passwordHash, around);
     }
     return { loaded: true };
   } finally {
@@ -44,7 +46,7 @@ export async function loadDemo(ownerUrl: string, { today, report, uploadsDir }: 
   }
 }
 
-async function loadWorkshop(client: Client, history: WorkshopHistory, passwordHash: string, around: Pick<LoadDemo, 'uploadsDir' | 'report'>): Promise<void> {
+async function loadWorkshop(client: Client, history: WorkshopHistory, passwordHash: string, around: Omit<LoadDemo, 'today'>): Promise<void> {
   const opened = `${addDays(history.startsOn, -90)}T08:00:00Z`;
   const workshopId = idAt(opened);
   const keys = new Keys();

@@ -1,3 +1,6 @@
+import { mkdtemp, readdir, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
 import { Client } from 'pg';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { loadDemo } from '#server/demo/load.ts';
@@ -8,6 +11,7 @@ const today = '2026-08-31';
 let database: TestDatabase;
 let client: Client;
 let workshopId: string;
+let uploadsDir: string;
 const lines: string[] = [];
 
 const count = async (table: 'batch' | 'batch_outcome' | 'checklist_answer' | 'finding' | 'lot') => {
@@ -20,7 +24,8 @@ const count = async (table: 'batch' | 'batch_outcome' | 'checklist_answer' | 'fi
 
 beforeAll(async () => {
   database = await aDatabase();
-  expect(await loadDemo(database.ownerUrl, { today, report: (line) => lines.push(line), uploadsDir: '/nowhere' })).toEqual({ loaded: true });
+  uploadsDir = await mkdtemp(path.join(tmpdir(), 'demo-photos-'));
+  expect(await loadDemo(database.ownerUrl, { today, report: (line) => lines.push(line), uploadsDir, mostPhotos: 6 })).toEqual({ loaded: true });
   client = new Client({ connectionString: database.appUrl });
   await client.connect();
   const account = await client.query<{ id: string }>(`select set_config('app.account_id', id::text, false) id from account where email = 'ilse@quernbyloft.example'`);
@@ -31,6 +36,7 @@ beforeAll(async () => {
 afterAll(async () => {
   await client.end();
   await database.drop();
+  await rm(uploadsDir, { recursive: true, force: true });
 });
 
 describe('demo loader', () => {
@@ -62,6 +68,21 @@ describe('demo loader', () => {
     expect(rows.map((row) => [row.code, row.oil === null, row.cut === null, row.gel])).toEqual([
       ['QL-0181', false, true, null], ['QL-0182', false, true, null], ['QL-0183', true, true, null], ['QL-0184', true, true, null], ['QL-0185', true, true, null],
     ]);
+  });
+
+  it('keeps each photo in the store, with its moment and its marks', async () => {
+    const { rows } = await client.query<{ id: string; taken: Date; media: string; looks: number; strayed: number }>(
+      `select p.id, p.taken_at taken, p.media_type media, count(m.id)::int looks, count(m.id) filter (where i.batch_id <> p.batch_id or i.stage <> p.stage)::int strayed
+       from photo p left join mark m on m.workshop_id = p.workshop_id and m.photo_id = p.id
+       left join finding f on f.workshop_id = m.workshop_id and f.id = m.finding_id
+       left join inspection i on i.workshop_id = f.workshop_id and i.id = f.inspection_id
+       group by p.workshop_id, p.id order by p.taken_at`,
+    );
+    const story = quernbyLoft(today).batches.flatMap((batch) => batch.photos).slice(0, 6);
+    expect(rows.map((row) => row.taken.getTime())).toEqual(story.map((photo) => Math.floor(Date.parse(photo.takenAt) / 1000) * 1000).sort((a, b) => a - b));
+    expect(rows.reduce((sum, row) => sum + row.looks, 0)).toBe(story.reduce((sum, photo) => sum + photo.marks.length, 0));
+    expect(rows.every((row) => row.strayed === 0 && row.media === 'image/jpeg')).toBe(true);
+    for (const { id } of rows) expect((await readdir(path.join(uploadsDir, workshopId, id))).map((name) => name.split('-')[1]).sort()).toEqual(['display', 'original', 'thumb']);
   });
 
   it('leaves a database alone that anybody uses already', async () => {

@@ -57,13 +57,16 @@ export const wrapMarks: FaultPainter = (pass) => {
 
 /** Tears where soap stayed on the liner: a rough hollow in a corner. */
 export const stuckInMould: FaultPainter = (pass) => {
-  const { raster, body, look, severity, random, scale } = pass;
+  const { raster, body, look, severity, random, scale, reach } = pass;
   const sideX = random.chance(0.5) ? -1 : 1;
   const sideY = random.chance(0.5) ? -1 : 1;
   const size = scale * (([34, 58, 92] as const)[severity - 1] as number) * (body.bar === 0 ? 1.5 : 1);
   const deep = Math.min(body.thickness * 0.7, 10 + 9 * severity);
+  // On an uncut loaf the tear is on the side of the bars that will carry it.
+  const middles = Array.from({ length: 21 }, (_, i) => ((i - 10) / 10) * body.halfWidth).filter((x) => reach(x) > 0.9);
+  const corner = body.bar === 0 && middles.length < 21 ? (middles[Math.floor(middles.length / 2)] ?? 0) : sideX * body.halfWidth;
   lay(pass, (k, x, y) => {
-    const from = Math.hypot((sideX * body.halfWidth - x) * (body.bar && body.side === 'top' ? 1.6 : 1), (sideY * body.halfHeight - y) * 1.1) / size;
+    const from = Math.hypot((corner - x) * (body.bar && body.side === 'top' ? 1.6 : 1), (sideY * body.halfHeight - y) * 1.1) / size;
     const torn = smooth(1.04, 0.94, from + (look.noise.cloud(x * 1.2, y * 1.2) - 0.5) * 0.5);
     if (torn <= 0) return 0;
     raise(raster, k, -torn * deep * (1.25 - from * 0.6) + torn * (look.otherNoise.cloud(x * 3, y * 3) - 0.5) * 9);
