@@ -40,7 +40,7 @@ export function DataTable<Row extends RowData>({ label, columns, rows, rowId, on
     event.stopPropagation();
   };
   return (
-    <div role="region" aria-label={label} tabIndex={0} className="tray-edge overflow-x-auto rounded-[2px] bg-tray">
+    <div role="region" aria-label={label} tabIndex={0} className="relative tray-edge overflow-x-auto rounded-[2px] bg-tray">
       <table className="w-full border-collapse">
         <thead className="sticky top-0 bg-tray">
           {table.getHeaderGroups().map((group) => (

@@ -24,7 +24,7 @@ export function BatchShelf({ batch, toLook }: { batch: AnyBatchView; toLook: (st
   const untied = pictures.filter((photo) => photo.stage === null).length;
   return (
     <>
-      <div role="region" aria-label="From the making to now" tabIndex={0} className="overflow-x-auto pb-1">
+      <div role="region" aria-label="From the making to now" tabIndex={0} className="relative overflow-x-auto pb-1">
         <ol className="flex min-w-full gap-0">
           <MakingPlace batch={batch} />
           {places.map((place) => <StagePlace key={place.stage} place={place} to={toLook(place.stage)} arePhotosRead={!photos.isError} />)}
@@ -46,7 +46,10 @@ function MakingPlace({ batch }: { batch: AnyBatchView }) {
     <li className={PLACE}>
       <div className="flex h-28 flex-col justify-end gap-0.5 pb-2 pr-3">
         {temperature !== null && <p className="gauge text-gauge-s leading-none">{showQuantity(temperature, 'temperature', account, 0)}</p>}
-        <p className="text-note text-ink-2">{batch.family === 'hot' ? 'when the scent went in' : 'batter'}{batch.traceAtPour && `, ${TRACE_WORDS[batch.traceAtPour].split(':')[0]} at pour`}</p>
+        <p className="text-note text-ink-2">
+          {temperature !== null && (batch.scentTemperatureC === null ? 'batter. ' : 'when the scent went in. ')}
+          {batch.traceAtPour ? `Trace at pour: ${TRACE_WORDS[batch.traceAtPour].split(':')[0]}` : temperature === null && 'no temperature recorded'}
+        </p>
       </div>
       <div className="h-1.5 bg-ink" />
       <div className="border-l-2 border-ink px-2 pt-1.5">

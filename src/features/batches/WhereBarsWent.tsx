@@ -30,13 +30,13 @@ export function WhereBarsWent({ batch }: { batch: AnyBatchView }) {
           <ul className="text-row">
             {DISPOSITIONS.map((kind) => ({ kind, parts: batch.dispositions.filter((part) => part.kind === kind) })).filter(({ parts }) => parts.length > 0).map(({ kind, parts }) => (
               <li key={kind} className="flex items-center gap-2.5 border-t border-line py-1.5">
-                <Strip pieces={[{ kind }]} label="" width={12} height={14} />
+                <span aria-hidden="true"><Strip pieces={[{ kind }]} label={DISPOSITION_WORDS[kind]} width={12} height={14} /></span>
                 <span>{DISPOSITION_WORDS[kind]}{parts.some(({ fault }) => fault) && <span className="text-ink-2">, for {parts.flatMap(({ fault }) => (fault ? [nameOf(fault).toLowerCase()] : [])).join(', ')}</span>}</span>
                 <span className="gauge ml-auto text-gauge-s">{parts.reduce((sum, part) => sum + part.bars, 0)}</span>
               </li>
             ))}
             {left > 0 && (
-              <li className="flex items-center gap-2.5 border-t border-line py-1.5"><Strip pieces={[{ kind: 'rack' }]} label="" width={12} height={14} /><span>on the rack</span><span className="gauge ml-auto text-gauge-s">{left}</span></li>
+              <li className="flex items-center gap-2.5 border-t border-line py-1.5"><span aria-hidden="true"><Strip pieces={[{ kind: 'rack' }]} label="on the rack" width={12} height={14} /></span><span>on the rack</span><span className="gauge ml-auto text-gauge-s">{left}</span></li>
             )}
           </ul>
         </>
