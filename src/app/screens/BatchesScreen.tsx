@@ -34,7 +34,8 @@ export function Component() {
   const go = useCallback((next: BatchesAsk, nextView: string) => {
     const address = addressOfAsk(next);
     if (nextView === 'faces') address.set('view', 'faces');
-    setSearch(address);
+    // At once: a second press must not start from the filter before the first.
+    setSearch(address, { flushSync: true });
   }, [setSearch]);
   const setAsk = useCallback((next: BatchesAsk) => go(next, view), [go, view]);
   const toggle = useCallback((id: string) => setSelected((before) => {
