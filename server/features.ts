@@ -3,6 +3,7 @@ import type { Pool } from 'pg';
 import type { Logger } from 'pino';
 import type { DataSource } from 'typeorm';
 import type { Config } from './config.ts';
+import { demoPassword } from './demo/password.ts';
 import { auditRoutes } from './features/audit/audit.routes.ts';
 import { batchesRoutes } from './features/batches/batches.routes.ts';
 import type { AnswerPool } from './features/causes/answer-pool.ts';
@@ -44,7 +45,7 @@ export interface Surroundings {
 /** Every feature's routes, one line each. */
 export function serveFeatures(api: Api, around: Surroundings): void {
   healthRoutes(api, { uploadsDir: around.config.uploadsDir, isStopping: around.isStopping });
-  sessionRoutes(api, around.throttle, around.config);
+  sessionRoutes(api, { throttle: around.throttle, config: around.config, demoPassword });
   membersRoutes(api, { config: around.config, throttle: around.throttle, door: { makeToken, tokenHash, hashPassword, passwordFits, refuseWeakPassword } });
   workshopRoutes(api);
   auditRoutes(api);

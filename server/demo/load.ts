@@ -7,12 +7,10 @@ import type { WorkshopHistory } from './history/types.ts';
 import { loadPhotos } from './load-photos.ts';
 import { batchRows } from './rows/batch-rows.ts';
 import { insertRows } from './rows/insert.ts';
+import { demoPassword } from './password.ts';
 import { idAt, Keys } from './rows/keys.ts';
 import { lookRows } from './rows/look-rows.ts';
 import { stockRows } from './rows/stock-rows.ts';
-
-/** Password of every account of the demo, shown on the sign-in page; production never loads a demo. */
-export const demoPassword = 'grey-board-demo';
 
 export interface LoadDemo {
   /** The day the demo is shown, YYYY-MM-DD; the story ends the day before. */

@@ -42,6 +42,8 @@ function problemOf(error: unknown): Problem | undefined {
   const parser = error as BodyParserError;
   if (parser?.type === 'entity.too.large') return tooLarge('The request is larger than 256 KiB');
   if (parser?.type === 'entity.parse.failed') return new Problem('malformed', 'The body is not valid JSON', { errors: [{ pointer: '#', detail: 'Not valid JSON' }] });
+  // The file server's own word for a missing asset.
+  if (parser?.status === 404) return new Problem('not-found', 'There is no such file');
   if (typeof parser?.status === 'number' && parser.status >= 400 && parser.status < 500) {
     return parser.status === 415 ? unsupportedMedia(parser.message) : malformed('The request could not be read');
   }

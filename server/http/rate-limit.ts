@@ -2,12 +2,14 @@ import type { Pool } from 'pg';
 import { RateLimiterPostgres, RateLimiterRes } from 'rate-limiter-flexible';
 import { tooMany } from '../problem.ts';
 
+export type ThrottleKind = 'addressAndAccount' | 'address' | 'account' | 'trickle' | 'mail';
+
 /**
- * Counts misses in PostgreSQL, so that several servers agree.
- * Never blocks longer than the window, and never a whole account for one address.
+ * Counts tries in PostgreSQL, so that several servers agree. A try is taken before the work and
+ * given back when it was a good one: a hundred at once count as a hundred.
  */
 export class Throttle {
-  private readonly limiters: Record<'addressAndAccount' | 'address' | 'account' | 'mail', RateLimiterPostgres>;
+  private readonly limiters: Record<ThrottleKind, RateLimiterPostgres>;
 
   constructor(pool: Pool) {
     const make = (keyPrefix: string, points: number, minutes: number) =>
@@ -16,23 +18,14 @@ export class Throttle {
       addressAndAccount: make('both', 10, 15),
       address: make('address', 50, 60),
       account: make('account', 100, 24 * 60),
+      /** What is left to unknown devices of an account that others tried a hundred times. */
+      trickle: make('trickle', 1, 1),
       mail: make('mail', 5, 60),
     };
   }
 
-  /** @throws Problem 429 with Retry-After when the key has used up its tries */
-  async refuseIfSpent(kind: keyof Throttle['limiters'], key: string): Promise<void> {
-    const state = await this.limiters[kind].get(key);
-    if (state && state.remainingPoints <= 0 && state.consumedPoints >= this.limiters[kind].points) throw tooMany(seconds(state));
-  }
-
-  /** Counts one miss. */
-  async miss(kind: keyof Throttle['limiters'], key: string): Promise<void> {
-    await this.limiters[kind].penalty(key);
-  }
-
-  /** Takes one try. @throws Problem 429 when none is left */
-  async take(kind: keyof Throttle['limiters'], key: string): Promise<void> {
+  /** Takes one try. @throws Problem 429 with Retry-After when none is left */
+  async take(kind: ThrottleKind, key: string): Promise<void> {
     try {
       await this.limiters[kind].consume(key);
     } catch (spent) {
@@ -41,7 +34,23 @@ export class Throttle {
     }
   }
 
-  async forget(kind: keyof Throttle['limiters'], key: string): Promise<void> {
+  /** Takes one try at an account; a known device always has one, an unknown one at least one a minute. */
+  async takeAccount(account: string, isKnownDevice: boolean): Promise<void> {
+    if (isKnownDevice) return;
+    try {
+      await this.limiters.account.consume(account);
+    } catch (spent) {
+      if (!(spent instanceof RateLimiterRes)) throw spent;
+      await this.take('trickle', account);
+    }
+  }
+
+  /** A good try does not count. */
+  async giveBack(kind: ThrottleKind, key: string): Promise<void> {
+    await this.limiters[kind].reward(key);
+  }
+
+  async forget(kind: ThrottleKind, key: string): Promise<void> {
     await this.limiters[kind].delete(key);
   }
 }

@@ -23,7 +23,8 @@ export function requestLog(logger: Logger): RequestHandler {
     serializers: { req: () => undefined, res: () => undefined, err: plainError },
     customSuccessObject: (request, response, line: object) => ({ ...line, ...requestLine(request, response) }),
     customErrorObject: (request, response, _error, line: object) => ({ ...line, err: undefined, ...requestLine(request, response) }),
-    customLogLevel: (_request, response, error) => (error || response.statusCode >= 500 ? 'error' : 'info'),
+    // A 503 mends itself: load was shed.
+    customLogLevel: (_request, response, error) => (response.statusCode === 503 ? 'warn' : error || response.statusCode >= 500 ? 'error' : 'info'),
     customSuccessMessage: () => 'request',
     customErrorMessage: () => 'request',
     autoLogging: { ignore: (request) => (request.url ?? '').startsWith('/api/health/') || !(request.url ?? '').startsWith('/api/') },

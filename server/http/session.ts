@@ -60,11 +60,28 @@ export function sessions(config: Config, pool: Pool): RequestHandler {
   });
 }
 
-/** Gives the request a session with a new id that belongs to this membership. */
-export async function openSession(request: Request, who: { accountId: string; workshopId: string; memberId: string }, now: Date): Promise<void> {
+/** A new id for whoever the session belongs to from now on; a made-up or earlier id is never taken over. */
+async function renewSession(request: Request, data: Pick<session.SessionData, 'accountId' | 'workshopId' | 'memberId' | 'signedInAt' | 'device'>): Promise<void> {
   await new Promise<void>((resolve, reject) => request.session.regenerate((error: unknown) => (error ? reject(error) : resolve())));
-  Object.assign(request.session, who, { signedInAt: now.getTime(), device: (request.get('User-Agent') ?? 'unknown device').slice(0, 200) });
+  Object.assign(request.session, data);
   await new Promise<void>((resolve, reject) => request.session.save((error: unknown) => (error ? reject(error) : resolve())));
+}
+
+interface Belonging {
+  accountId: string;
+  workshopId: string;
+  memberId: string;
+}
+
+/** Gives the request a session with a new id that belongs to this membership. */
+export async function openSession(request: Request, who: Belonging, now: Date): Promise<void> {
+  await renewSession(request, { ...who, signedInAt: now.getTime(), device: (request.get('User-Agent') ?? 'unknown device').slice(0, 200) });
+}
+
+/** A new id for the same sign-in, e.g. in another workshop or after a new password; its thirty days run on. */
+export async function moveSession(request: Request, who: Belonging): Promise<void> {
+  const { signedInAt, device } = request.session;
+  await renewSession(request, { ...who, signedInAt: signedInAt ?? 0, device: device ?? 'unknown device' });
 }
 
 export async function endSession(request: Request): Promise<void> {

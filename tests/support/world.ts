@@ -44,6 +44,11 @@ async function asWorkshop<T>(app: RunningApp, workshopId: string, work: (client:
   }
 }
 
+/** The session's cookie in an answer, as a request sends it back. */
+export function sessionCookie(answer: request.Response): string {
+  return /(?:^|,)((?:__Host-)?lm=[^;]+)/.exec(String(answer.headers['set-cookie']))?.[1] ?? '';
+}
+
 let people = 0;
 
 async function aPerson(app: RunningApp, client: Client, workshopId: string, role: Role): Promise<Person> {
@@ -54,7 +59,7 @@ async function aPerson(app: RunningApp, client: Client, workshopId: string, role
   await client.query('insert into member (workshop_id, id, account_id, name, role) values ($1, $2, $3, $4, $5)', [workshopId, memberId, accountId, `Test ${role}`, role]);
   const answer = await request(app.url).post('/api/session').send({ email, password: PASSWORD });
   if (answer.status !== 200) throw new Error(`sign-in of a test person answered ${answer.status}: ${answer.text}`);
-  const cookie = String(answer.headers['set-cookie']).split(';')[0] ?? '';
+  const cookie = sessionCookie(answer);
   const raw = (method: 'get' | 'post' | 'put' | 'patch' | 'delete', path: string) => request(app.url)[method](path).set('Cookie', cookie);
   const write = (method: 'put' | 'patch', path: string, body: unknown, version?: number) => {
     const test = raw(method, path);

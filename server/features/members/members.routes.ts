@@ -11,13 +11,16 @@ export function membersRoutes(api: Api, { config, throttle, door }: { config: Co
   api.serve(membersApi.list, ({ tx }) => listMembers(tx));
   api.serve(membersApi.details, ({ tx }) => listMembers(tx));
   api.serve(membersApi.invite, async ({ tx, body }) => {
-    await throttle.take('mail', body.email.toLowerCase());
+    // By workshop too: one workshop's mails must not use up another's.
+    await throttle.take('mail', `${tx.workshopId}|${body.email.toLowerCase()}`);
+    await throttle.take('address', `invite|${tx.workshopId}`);
     await inviteMember(tx, door, config.publicUrl, body);
     return ACCEPTED;
   });
   api.open(membersApi.readInvitation, ({ lobby, params }) => readInvitation(lobby, door, params.token));
   api.open(membersApi.accept, async ({ lobby, body, request }) => {
-    await throttle.take('mail', request.ip ?? 'unknown');
+    await throttle.take('address', `join|${request.ip ?? 'unknown'}`);
+    await throttle.take('addressAndAccount', `join|${door.tokenHash(body.token)}`);
     return { ...ACCEPTED, workshopId: await acceptInvitation(lobby, door, body) };
   });
   api.serve(membersApi.change, ({ tx, params, body, version }) => changeMember(tx, params.memberId, body, version));

@@ -4,6 +4,7 @@ import type { AcceptInvitation, ChangeMember, Invitation, Invite, MemberDetails 
 import type { Role } from '#shared/words/roles.ts';
 import { lockForChange, saveChange } from '#server/db/records.ts';
 import type { LobbyTransaction, WorkshopTransaction } from '#server/db/workshop-transaction.ts';
+import { invitationLetter } from '#server/mail/letters.ts';
 import { putMail } from '#server/mail/outbox.ts';
 import { conflict, invalidField, notFound } from '#server/problem.ts';
 import { Member } from './member.entity.ts';
@@ -22,18 +23,25 @@ export interface Door {
 
 const INVITATION_DAYS = 7;
 
-/** Mails an invitation; whether the address is known shows only in the mail. */
-export async function inviteMember(tx: WorkshopTransaction, door: Door, publicUrl: string, { email, name, role }: z.output<typeof Invite>): Promise<void> {
+/**
+ * Mails an invitation; one still open to the same address is replaced. Whether the address has an account shows only in the mail's page.
+ *
+ * @throws Problem 409 when somebody with this address is a member already
+ */
+export async function inviteMember(tx: WorkshopTransaction, door: Door, publicUrl: string, { email, name, role }: Invite): Promise<void> {
+  const already = await tx.row(
+    'select 1 from member m join account a on a.id = m.account_id where m.workshop_id = $1 and lower(a.email) = lower($2) and m.ended_at is null', [tx.workshopId, email],
+  );
+  if (already) throw conflict('Somebody with this address is a member already');
   const { token, hash } = door.makeToken();
   const workshop = await tx.row<{ name: string }>('select name from workshop where id = $1', [tx.workshopId]);
+  await tx.rows(`update one_time_token set used_at = $3 where purpose = 'invitation' and workshop_id = $1 and lower(email) = lower($2) and used_at is null`, [tx.workshopId, email, tx.now]);
   await tx.rows(
-    `insert into one_time_token (token_hash, purpose, workshop_id, email, name, role, expires_at) values ($1, 'invitation', $2, $3, $4, $5, now() + make_interval(days => $6))`,
-    [hash, tx.workshopId, email, name, role, INVITATION_DAYS],
+    `insert into one_time_token (token_hash, purpose, workshop_id, email, name, role, expires_at) values ($1, 'invitation', $2, $3, $4, $5, $6::timestamptz + make_interval(days => $7))`,
+    [hash, tx.workshopId, email, name, role, tx.now, INVITATION_DAYS],
   );
-  await putMail(tx, {
-    workshopId: tx.workshopId, recipient: email, subject: `${tx.member.name} invites you to ${workshop?.name ?? 'a workshop'}`,
-    body: `Hello ${name},\n${tx.member.name} invites you to join ${workshop?.name ?? 'a workshop'} as ${role}. Open this link within ${INVITATION_DAYS} days:\n${publicUrl}/invitation/${token}`,
-  });
+  await putMail(tx, { workshopId: tx.workshopId, recipient: email, ...invitationLetter(publicUrl, { token, from: tx.member.name, workshop: workshop?.name ?? 'a workshop', name, role, days: INVITATION_DAYS }) });
+  await tx.noteDeed('invite', 'member', null, { email, name, role });
 }
 
 interface InvitationRow {
@@ -91,7 +99,8 @@ export async function acceptInvitation(lobby: Lobby, door: Door, { token, name, 
     await tx.enterWorkshop(offered.workshop_id, memberId);
     await tx.rows(
       `insert into member (workshop_id, id, account_id, name, role) values ($1, $2, $3, $4, $5)
-       on conflict (workshop_id, account_id) do update set role = excluded.role, ended_at = null, version = member.version + 1, updated_at = now()`,
+       on conflict (workshop_id, account_id) do update set name = excluded.name, role = excluded.role, ended_at = null, version = member.version + 1, updated_at = now()
+         where member.ended_at is not null`,
       [offered.workshop_id, memberId, accountId, name, offered.role],
     );
     return offered.workshop_id;

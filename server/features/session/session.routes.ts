@@ -2,55 +2,70 @@ import type { Request } from 'express';
 import { sessionApi } from '#shared/session.ts';
 import type { Config } from '#server/config.ts';
 import type { Api } from '#server/http/api.ts';
+import { isKnownDevice, rememberDevice } from '#server/http/known-device.ts';
+import { atPace } from '#server/http/pace.ts';
 import type { Throttle } from '#server/http/rate-limit.ts';
-import { endSession, openSession, sessionKey } from '#server/http/session.ts';
+import { endSession, moveSession, openSession, sessionKey } from '#server/http/session.ts';
 import { notFound } from '#server/problem.ts';
 import { demoAccounts, openSessions } from './open-sessions.read.ts';
-import { askReset, changePassword, resetPassword } from './password.service.ts';
+import { askReset, changePassword, proveCurrentPassword, resetPassword } from './password.service.ts';
 import { membershipsOf, sessionView } from './session.read.ts';
 import { checkSignIn } from './session.service.ts';
 import { signUp } from './sign-up.service.ts';
 
-/** Password of the demo's accounts; there is no demo in production. */
-const DEMO_PASSWORD = 'grey-board-demo';
+/** Longer than a mail takes to write, so that a known address answers no later than an unknown one. */
+const MAIL_PACE_MS = 250;
 const ACCEPTED = { accepted: true as const };
 const addressOf = (request: Request) => request.ip ?? 'unknown';
 
-export function sessionRoutes(api: Api, throttle: Throttle, config: Config): void {
-  api.open(sessionApi.signIn, async ({ body, request, lobby, now }) => {
-    const who = await checkSignIn(lobby, throttle, addressOf(request), body);
+interface SessionSurroundings {
+  throttle: Throttle;
+  config: Config;
+  demoPassword: string;
+}
+
+export function sessionRoutes(api: Api, { throttle, config, demoPassword }: SessionSurroundings): void {
+  api.open(sessionApi.signIn, async ({ body, request, response, lobby, now }) => {
+    const device = { address: addressOf(request), isKnown: isKnownDevice(config, request, body.email, now) };
+    const who = await checkSignIn(lobby, throttle, device, body);
     await openSession(request, who, now);
+    rememberDevice(config, response, body.email, now);
     return lobby((tx) => sessionView(tx, who.accountId, who.workshopId));
   });
   api.account(sessionApi.whoAmI, ({ member, lobby }) => lobby((tx) => sessionView(tx, member.accountId, member.workshopId)));
   api.account(sessionApi.signOut, ({ request }) => endSession(request));
-  api.account(sessionApi.switchWorkshop, async ({ member, body, request, lobby, now }) => {
+  api.account(sessionApi.switchWorkshop, async ({ member, body, request, lobby }) => {
     const memberships = await lobby((tx) => membershipsOf(tx, member.accountId));
     const chosen = memberships.find((membership) => membership.workshop_id === body.workshopId);
     if (!chosen) throw notFound('workshop of yours');
-    await openSession(request, { accountId: member.accountId, workshopId: chosen.workshop_id, memberId: chosen.member_id }, now);
+    await moveSession(request, { accountId: member.accountId, workshopId: chosen.workshop_id, memberId: chosen.member_id });
     return lobby((tx) => sessionView(tx, member.accountId, chosen.workshop_id));
   });
   api.open(sessionApi.signUp, async ({ body, request, lobby }) => {
-    await throttle.take('mail', addressOf(request));
-    await signUp(lobby, config.publicUrl, body);
+    await throttle.take('address', `sign-up|${addressOf(request)}`);
+    await throttle.take('mail', `sign-up|${body.email.toLowerCase()}`);
+    await atPace(MAIL_PACE_MS, () => signUp(lobby, config.publicUrl, body));
     return ACCEPTED;
   });
-  api.open(sessionApi.askReset, async ({ body, lobby }) => {
+  api.open(sessionApi.askReset, async ({ body, request, lobby }) => {
+    await throttle.take('address', `reset|${addressOf(request)}`);
     await throttle.take('mail', body.email.toLowerCase());
-    await askReset(lobby, config.publicUrl, body.email);
+    await atPace(MAIL_PACE_MS, () => askReset(lobby, config.publicUrl, body.email));
     return ACCEPTED;
   });
-  api.open(sessionApi.resetPassword, async ({ body, lobby }) => {
-    await resetPassword(lobby, body.token, body.password);
+  api.open(sessionApi.resetPassword, async ({ body, request, lobby }) => {
+    await throttle.take('address', `reset|${addressOf(request)}`);
+    const email = await resetPassword(lobby, config.publicUrl, body.token, body.password);
+    // Whoever reads the mail is the person: earlier wrong tries shut nobody out.
+    await Promise.all([throttle.forget('account', email.toLowerCase()), throttle.forget('addressAndAccount', `${addressOf(request)}|${email.toLowerCase()}`)]);
     return ACCEPTED;
   });
   api.account(sessionApi.changePassword, async ({ member, body, request, lobby }) => {
-    await throttle.refuseIfSpent('account', member.accountId);
-    await changePassword(lobby, member.accountId, sessionKey(request.sessionID), body).catch(async (error: unknown) => {
-      await throttle.miss('account', member.accountId);
-      throw error;
-    });
+    await throttle.take('addressAndAccount', `change|${member.accountId}`);
+    const { email } = await proveCurrentPassword(lobby, member.accountId, body.current);
+    await throttle.forget('addressAndAccount', `change|${member.accountId}`);
+    await changePassword(lobby, config.publicUrl, { id: member.accountId, email }, sessionKey(request.sessionID), body.password);
+    await moveSession(request, { accountId: member.accountId, workshopId: member.workshopId, memberId: member.id });
     return ACCEPTED;
   });
   api.account(sessionApi.setPreferences, ({ member, body, lobby }) =>
@@ -66,6 +81,6 @@ export function sessionRoutes(api: Api, throttle: Throttle, config: Config): voi
     }));
   api.open(sessionApi.demoAccounts, ({ lobby }) => {
     if (config.mode === 'production') throw notFound('demo');
-    return lobby((tx) => demoAccounts(tx, DEMO_PASSWORD));
+    return lobby((tx) => demoAccounts(tx, demoPassword));
   });
 }

@@ -82,3 +82,38 @@ describe('members', () => {
     await there.owner.patch(`/api/members/${here.owner.memberId}`, { name: 'X' }, 1).expect(404);
   });
 });
+
+describe('an invitation', () => {
+  const join = (token: string) => http().post('/api/invitations/accept').send({ token, name: 'Bo', password: 'soap is slippery stuff' });
+
+  it('is won by one of two who accept at once, and leaves its line in the trail', async () => {
+    const world = await aWorkshop(app());
+    const token = await invited(world, 'bo.twice@test.example');
+    const answers = await Promise.all([join(token), join(token)]);
+    expect(answers.filter(({ status }) => status === 200)).toHaveLength(1);
+    expect(answers.every(({ status }) => [200, 404, 409].includes(status))).toBe(true);
+    const trail = await world.sql<{ deed: string }>(`select deed from audit_entry where table_name = 'member' order by id`);
+    expect(trail.map(({ deed }) => deed)).toEqual(['insert', 'invite', 'insert']);
+  });
+
+  it('is replaced by a later one, and dead after seven days', async () => {
+    const world = await aWorkshop(app());
+    const [earlier, later] = [await invited(world, 'bo.again@test.example'), await invited(world, 'bo.again@test.example')];
+    await http().get(`/api/invitations/${earlier}`).expect(404);
+    await http().get(`/api/invitations/${later}`).expect(200);
+    await world.sql(`update one_time_token set expires_at = now() - interval '1 second' where email = 'bo.again@test.example' and used_at is null`);
+    await http().get(`/api/invitations/${later}`).expect(404);
+    await join(later).expect(404);
+  });
+
+  it('is not needed by a member, and takes somebody who left back in', async () => {
+    const world = await aWorkshop(app());
+    const maker = await world.member('maker');
+    await world.owner.post('/api/invitations', { email: maker.email.toUpperCase(), name: 'X', role: 'viewer' }).expect(409);
+    await world.owner.patch(`/api/members/${maker.memberId}`, { hasEnded: true }, 1).expect(200);
+    const token = await invited(world, maker.email, 'inspector');
+    await http().post('/api/invitations/accept').send({ token, name: 'Back again', password: PASSWORD }).expect(200);
+    const session = await http().post('/api/session').send({ email: maker.email, password: PASSWORD }).expect(200);
+    expect(session.body.member).toEqual({ id: maker.memberId, name: 'Back again', role: 'inspector' });
+  });
+});

@@ -2,12 +2,11 @@ import request from 'supertest';
 import { v7 as uuidv7 } from 'uuid';
 import { describe, expect, it } from 'vitest';
 import { appForFile } from '#tests/support/app.ts';
-import { aWorkshop, PASSWORD } from '#tests/support/world.ts';
+import { aWorkshop, PASSWORD, sessionCookie } from '#tests/support/world.ts';
 
 const app = appForFile();
 const http = () => request(app().url);
 const signIn = (email: string, password = PASSWORD) => http().post('/api/session').send({ email, password });
-const cookieOf = (answer: request.Response) => String(answer.headers['set-cookie']).split(';')[0] ?? '';
 const signUpWish = (over: object = {}) => ({ workshopId: uuidv7(), workshopName: 'Gull Street Soap', name: 'Ada Penrose', email: `ada${uuidv7().slice(-8)}@test.example`, password: 'four unrelated words', ...over });
 
 describe('signing in', () => {
@@ -28,9 +27,9 @@ describe('signing in', () => {
 
   it('never takes over an id that the browser brought', async () => {
     const { owner } = await aWorkshop(app());
-    const first = cookieOf(await signIn(owner.email));
+    const first = sessionCookie(await signIn(owner.email));
     const second = await http().post('/api/session').set('Cookie', first).send({ email: owner.email, password: PASSWORD }).expect(200);
-    expect(cookieOf(second)).not.toBe(first);
+    expect(sessionCookie(second)).not.toBe(first);
     await http().get('/api/session').set('Cookie', first).expect(401);
     const made = await http().get('/api/session').set('Cookie', 'lm=s%3Amade-up.signature').expect(401);
     expect(made.headers['set-cookie']).toBeUndefined();
@@ -72,7 +71,7 @@ describe('signing up', () => {
     await http().post('/api/sign-up').send(wish).expect(200);
     const answer = await signIn(wish.email, wish.password).expect(200);
     expect(answer.body).toMatchObject({ member: { role: 'owner', name: 'Ada Penrose' }, workshop: { id: wish.workshopId, name: 'Gull Street Soap' } });
-    expect((await http().get('/api/batches').set('Cookie', cookieOf(answer)).expect(200)).body.items).toEqual([]);
+    expect((await http().get('/api/batches').set('Cookie', sessionCookie(answer)).expect(200)).body.items).toEqual([]);
   });
 
   it('answers a known address the same, makes nothing, and mails it', async () => {
@@ -110,11 +109,11 @@ describe('setting a new password', () => {
 
   it('is changed by somebody who knows the current one; other sessions end', async () => {
     const { owner } = await aWorkshop(app());
-    const elsewhere = cookieOf(await signIn(owner.email));
+    const elsewhere = sessionCookie(await signIn(owner.email));
     await owner.put('/api/session/password', { current: 'wrong', password: 'five more unrelated words' }).expect(422);
-    await owner.put('/api/session/password', { current: PASSWORD, password: 'five more unrelated words' }).expect(200);
+    const changed = await owner.put('/api/session/password', { current: PASSWORD, password: 'five more unrelated words' }).expect(200);
     await http().get('/api/session').set('Cookie', elsewhere).expect(401);
-    await owner.get('/api/session').expect(200);
+    await http().get('/api/session').set('Cookie', sessionCookie(changed)).expect(200);
   });
 });
 
