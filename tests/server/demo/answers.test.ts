@@ -1,6 +1,7 @@
 import request from 'supertest';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { demoPassword, loadDemo } from '#server/demo/load.ts';
+import { loadDemo } from '#server/demo/load.ts';
+import { demoPassword } from '#server/demo/password.ts';
 import type { CauseCell, CausesBoard } from '#shared/causes.ts';
 import type { LotBehaviourRow, LotBehaviourView } from '#shared/lot-behaviour.ts';
 import type { MethodComparison } from '#shared/method-comparison.ts';
