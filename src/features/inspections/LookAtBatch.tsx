@@ -80,7 +80,7 @@ export function LookAtBatch({ batch, stage, photoAdder }: LookAtBatchProps) {
     const isKept = await look.keep(wish);
     // Nothing typed is lost: what could not be kept comes back into the editor.
     if (!isKept) { setDraft(kept); setOpenMarks(marks); return; }
-    toasts.tell(`${nameOf(kept.fault)} is kept`, () => { const finding = latest(look, wish.id); if (finding) look.takeBack(finding); });
+    toasts.tell(`${nameOf(kept.fault)} is kept`, () => look.takeBack(wish.id));
   };
 
   const shown: ShownMark[] = [
@@ -120,7 +120,7 @@ export function LookAtBatch({ batch, stage, photoAdder }: LookAtBatchProps) {
         {draft && <MarkEditor draft={draft} onDraft={setDraft} faults={ordered} taken={taken} onKeep={() => void keep()} onTakeBack={close} />}
         <div className="grid gap-5 bench:px-5">
           {!draft && canMark && <p className="text-note text-ink-2 max-bench:hidden">Touch the photo where you see something, or choose “found” below.</p>}
-          <KeptFindings findings={look.findings} faults={catalogue} chosen={chosen} onChoose={(id) => { setChosen(id); setPhotoId(look.findings.find((finding) => finding.id === id)?.marks[0]?.photoId ?? photoId); }} isReadOnly={!canMark} onTakeBack={(finding) => { const kept = latest(look, finding.id); if (kept) look.takeBack(kept); }} />
+          <KeptFindings findings={look.findings} faults={catalogue} chosen={chosen} onChoose={(id) => { setChosen(id); setPhotoId(look.findings.find((finding) => finding.id === id)?.marks[0]?.photoId ?? photoId); }} isReadOnly={!canMark} onTakeBack={(finding) => look.takeBack(finding.id)} />
           <FaultChecklist stageName={STAGE_WORDS[stage]} faults={atStage} answerOf={look.answerOf} onAnswer={look.answer} isReadOnly={!canMark} onFound={(fault) => { setOpenMarks([]); setDraft(freshDraft(fault, [])); }} />
           {look.isSending && <p role="status" className="text-note text-ink-2">Sending …</p>}
           <Block kind="quiet" className="justify-self-start" onClick={() => window.history.back()}>Leave for now</Block>
@@ -132,10 +132,4 @@ export function LookAtBatch({ batch, stage, photoAdder }: LookAtBatchProps) {
 
 function markWish(photoId: string, { x, y, width, height }: Point & { width?: number; height?: number }): MarkWish {
   return width && height ? { id: uuidv7(), photoId, shape: 'box', x, y, width, height } : { id: uuidv7(), photoId, shape: 'point', x, y };
-}
-
-/** A finding as the server has it; one still on its way cannot be taken back yet. */
-function latest(look: ReturnType<typeof useLook>, id: string) {
-  const finding = look.inspection?.findings.find((other) => other.id === id) ?? look.findings.find((other) => other.id === id);
-  return finding && !('isOnItsWay' in finding) ? finding : undefined;
 }

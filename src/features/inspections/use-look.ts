@@ -17,7 +17,7 @@ export interface Look {
   answerOf(fault: string): Answer;
   answer(faults: readonly string[], answer: Answer): void;
   keep(finding: NewFinding): Promise<boolean>;
-  takeBack(finding: FindingView): void;
+  takeBack(findingId: string): void;
   isSending: boolean;
 }
 
@@ -86,10 +86,11 @@ export function useLook(batchId: string, stage: Stage): Look {
     return isKept;
   };
 
-  const takeBack = (finding: FindingView) => {
+  const takeBack = (findingId: string) => {
     void send(async (look) => {
-      const now = look.findings.find(({ id }) => id === finding.id) ?? finding;
-      await call(inspectionsApi.withdrawFinding, { params: { findingId: finding.id }, body: { isWithdrawn: true }, version: now.version });
+      const finding = look.findings.find(({ id }) => id === findingId);
+      if (!finding) return;
+      await call(inspectionsApi.withdrawFinding, { params: { findingId }, body: { isWithdrawn: true }, version: finding.version });
       await refresh(look.id);
     });
   };
