@@ -43,6 +43,8 @@ export function makeRouter(client: QueryClient) {
             { path: paths.claim(':claimId'), lazy: () => import('./screens/ClaimScreen.tsx') },
             { path: paths.imports, lazy: () => import('./screens/ImportsScreen.tsx') },
             { path: paths.import(':importId'), lazy: () => import('./screens/ImportScreen.tsx') },
+            { path: paths.causes, lazy: () => import('./screens/CausesScreen.tsx') },
+            { path: '/causes/:fault/:input', lazy: () => import('./screens/CauseScreen.tsx') },
             { path: paths.pieces, lazy: () => import('./screens/PiecesScreen.tsx') },
           ],
         },
