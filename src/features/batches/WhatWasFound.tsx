@@ -63,7 +63,7 @@ function FindingLine({ finding, look, barsMade }: { finding: FindingView; look: 
       {pieces && count && <Strip pieces={pieces} label={count} width={10} height={16} />}
       <p className="text-ink-2">
         {finding.note && `${finding.note.replace(/\.$/, '')}. `}
-        {[count, `severity ${finding.severity}`].filter(Boolean).join(', ')}. {look.inspectorName ? `${look.inspectorName.split(' ')[0]}, at` : 'At'} {STAGE_WORDS[look.stage].toLowerCase()}.
+        {count ? `${count}, severity` : 'Severity'} {finding.severity}. {look.inspectorName ? `${look.inspectorName.split(' ')[0]}, at` : 'At'} {STAGE_WORDS[look.stage].toLowerCase()}.
       </p>
     </div>
   );
