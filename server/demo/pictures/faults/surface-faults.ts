@@ -1,5 +1,5 @@
 import { linear, raise, shine, smooth, stain, tint } from '../raster.ts';
-import { combed } from '../surfaces/top.ts';
+import { combedOver } from '../surfaces/comb-table.ts';
 import { type FaultPainter, lay, scatter, stamp } from './fault-pass.ts';
 
 const ash = linear('#eceeed');
@@ -9,10 +9,11 @@ export const sodaAsh: FaultPainter = (pass) => {
   const { raster, body, look, severity, offset } = pass;
   const cover = ([0.36, 0.6, 0.86] as const)[severity - 1] as number;
   const isFace = body.side === 'face';
+  const ridgeAt = isFace ? () => ({ height: 0 }) : combedOver(look, body, offset);
   lay(pass, (k, x, y, depth, reach) => {
     const u = x + offset;
     const place = look.otherNoise.cloud(u * 0.28 + body.bar * 13, y * 0.28) * 0.66 + look.noise.cloud(u * 1.1, y * 1.1) * 0.34;
-    const favour = isFace ? smooth(60 * pass.scale, 0, depth) * 0.5 - 0.2 : (combed(look, u, y).height - 0.4) * 0.3;
+    const favour = isFace ? smooth(60 * pass.scale, 0, depth) * 0.5 - 0.2 : (ridgeAt(x, y).height - 0.4) * 0.3;
     const film = smooth(1 - cover - 0.06, 1 - cover + 0.2, place + favour) * reach;
     if (film < 0.01) return 0;
     const powder = 0.62 + 0.38 * look.noise.grain(x * 0.9, y * 0.9);

@@ -2,7 +2,7 @@ import { type Body, forEachPixel } from '../body.ts';
 import type { Look } from '../look.ts';
 import { linear, mix, type Raster, smooth } from '../raster.ts';
 import { put } from './face.ts';
-import { combed } from './top.ts';
+import { combedOver } from './comb-table.ts';
 
 const woodLight = linear('#b3936a');
 const woodDark = linear('#6d5233');
@@ -24,10 +24,11 @@ export function paintMould(raster: Raster, mould: Body, look: Look, isWood: bool
 /** Paints wet batter in its mould; cooked soap is spooned in and stays in lumps. */
 export function paintBatter(raster: Raster, body: Body, look: Look): void {
   const { noise, otherNoise } = look;
+  const strokeAt = combedOver(look, body, 500);
   const isPlain = look.design === 'plain' || look.design === 'specks';
   forEachPixel(raster, body, (k, x, y, depth) => {
     const u = x + 500;
-    const stroke = combed(look, u, y);
+    const stroke = strokeAt(x, y);
     const slow = (noise.cloud(u * 0.5, y * 0.5) - 0.5) * 4;
     const lumps = look.isRough ? (noise.cloud(u * 0.8, y * 0.8) - 0.5) * 22 + (otherNoise.cloud(u * 2.2, y * 2.2) - 0.5) * 9 : stroke.height * 5.5 + slow;
     raster.z[k] = body.thickness + lumps + smooth(9, 0, depth) * 5;

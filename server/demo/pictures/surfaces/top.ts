@@ -1,6 +1,7 @@
 import { type Body, edgeHeight, forEachPixel } from '../body.ts';
 import type { Look } from '../look.ts';
 import { type Colour, mix, type Raster, smooth } from '../raster.ts';
+import { combedOver } from './comb-table.ts';
 import { put } from './face.ts';
 
 export interface Stroke { height: number; share: number; thread: number }
@@ -24,13 +25,14 @@ export function combed(look: Look, u: number, v: number): Stroke {
 /** Paints the top of a loaf or of its bars, seen from above. `along` is where the body's left end lies in the loaf. */
 export function paintTop(raster: Raster, body: Body, look: Look, offset: number): void {
   const { noise, otherNoise } = look;
+  const strokeAt = combedOver(look, body, offset);
   const relief = look.isRough ? 5 : 13;
   const isPlain = look.design === 'plain' || look.design === 'specks';
   const specksIn = look.design === 'specks';
   const dark: Colour = [look.second[0] * 0.8, look.second[1] * 0.8, look.second[2] * 0.8];
   forEachPixel(raster, body, (k, x, y, depth) => {
     const u = x + offset;
-    const stroke = combed(look, u, y);
+    const stroke = strokeAt(x, y);
     const across = Math.abs(y) / body.halfHeight;
     const middle = 1 - across * across;
     const round = edgeHeight(depth, 6);
