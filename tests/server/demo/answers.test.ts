@@ -6,6 +6,7 @@ import type { CauseCell, CausesBoard } from '#shared/causes.ts';
 import type { LotBehaviourRow, LotBehaviourView } from '#shared/lot-behaviour.ts';
 import type { MethodComparison } from '#shared/method-comparison.ts';
 import { appForFile } from '#tests/support/app.ts';
+import { sessionCookie } from '#tests/support/world.ts';
 
 const app = appForFile();
 let cookie: string;
@@ -31,7 +32,7 @@ const isFirm = (cell: CauseCell) => cell.grade === 'settled' || cell.grade === '
 beforeAll(async () => {
   await loadDemo(app().database.ownerUrl, { today: '2026-08-31', report: () => undefined, uploadsDir: app().uploadsDir });
   const signedIn = await request(app().url).post('/api/session').send({ email: 'ilse@quernbyloft.example', password: demoPassword });
-  cookie = String(signedIn.headers['set-cookie']).split(';')[0] ?? '';
+  cookie = sessionCookie(signedIn);
   [whole, cold] = [await read<CausesBoard>('/api/causes'), await read<CausesBoard>('/api/causes?family=cold')];
 }, 90_000);
 
