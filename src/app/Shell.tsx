@@ -1,6 +1,7 @@
 import { Camera, LayoutGrid, List, MoreHorizontal, Moon, Sun } from 'lucide-react';
 import { useEffect, useMemo, useState } from 'react';
 import { Link, NavLink, Outlet, useNavigate } from 'react-router-dom';
+import { UploadsLine } from '#src/features/photos/UploadsLine.tsx';
 import { useSession } from '#src/features/session/session.queries.ts';
 import { setSingleKeys, useKeys } from '#src/lib/keys.ts';
 import { setRoom, useRoom } from '#src/lib/room.ts';
@@ -77,6 +78,7 @@ export function Shell() {
           <PersonMenu onKeys={() => setKeysOpen(true)} />
         </div>
       </header>
+      <UploadsLine batchAddress={paths.batch} />
       <main id="main" tabIndex={-1} className="mx-auto w-full max-w-[107.5rem] flex-1 px-5 pb-10 pt-6 outline-none max-rack:px-4 max-rack:pb-24 max-rack:pt-4">
         <Outlet />
       </main>

@@ -14,6 +14,7 @@ import { batchQuery } from '#src/features/batches/batches.queries.ts';
 import { WhatWasFound } from '#src/features/batches/WhatWasFound.tsx';
 import { WhatWentIn } from '#src/features/batches/WhatWentIn.tsx';
 import { WhereBarsWent } from '#src/features/batches/WhereBarsWent.tsx';
+import { PhotoStrip } from '#src/features/photos/PhotoStrip.tsx';
 import { useMay } from '#src/features/session/session.queries.ts';
 import { formatLongDay } from '#src/lib/format.ts';
 import { METHOD_WORDS, STATE_WORDS } from '#src/lib/words.ts';
@@ -32,6 +33,7 @@ export function Component() {
       <BatchHead batch={batch.data} />
       {batch.data.holdReason && <div className="mt-4"><Caution>Held: {batch.data.holdReason}</Caution></div>}
       <div className="mt-6"><BatchShelf batch={batch.data} toLook={toLook} /></div>
+      <div className="mt-8"><PhotoStrip batchId={batchId} batchCode={batch.data.code} /></div>
       <div className="mt-8 grid gap-x-9 gap-y-8 bench:grid-cols-2 desk:grid-cols-[1.15fr_1.2fr_0.9fr]">
         <WhatWentIn batch={batch.data} toLot={paths.lot} />
         <WhatWasFound batch={batch.data} />

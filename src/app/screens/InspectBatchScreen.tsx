@@ -8,6 +8,7 @@ import { SelectField } from '#src/components/TextField.tsx';
 import { batchQuery } from '#src/features/batches/batches.queries.ts';
 import { LookAtBatch } from '#src/features/inspections/LookAtBatch.tsx';
 import { dueQuery } from '#src/features/inspections/inspections.queries.ts';
+import { PhotoAdder } from '#src/features/photos/PhotoAdder.tsx';
 import { formatDay } from '#src/lib/format.ts';
 import { METHOD_WORDS, optionsOf, STAGE_WORDS } from '#src/lib/words.ts';
 import { paths } from '../paths.ts';
@@ -36,7 +37,7 @@ function Look({ batchId }: { batchId: string }) {
         <SelectField label="Stage" className="ml-auto grid-flow-col items-center gap-2 max-rack:ml-0" value={stage} options={optionsOf(STAGES, STAGE_WORDS)} onChange={(event) => setSearch({ stage: event.target.value }, { replace: true })} />
       </div>
       {batch.holdReason && <p role="alert" className="bg-safe-fill px-3.5 py-2.5 font-[560] text-on-safe">Held: {batch.holdReason}</p>}
-      <LookAtBatch key={stage} batch={batch} stage={stage} photoAdder={null} />
+      <LookAtBatch key={stage} batch={batch} stage={stage} photoAdder={<PhotoAdder batchId={batch.id} batchCode={batch.code} stage={stage} />} />
     </div>
   );
 }

@@ -7,6 +7,8 @@ import { batchesQuery } from '#src/features/batches/batches.queries.ts';
 import { faultsQuery } from '#src/features/faults/faults.queries.ts';
 import { DueList } from '#src/features/inspections/DueList.tsx';
 import { dueQuery } from '#src/features/inspections/inspections.queries.ts';
+import { UploadList } from '#src/features/photos/UploadList.tsx';
+import { useUploads } from '#src/features/photos/Uploads.tsx';
 import { useMay, useSession } from '#src/features/session/session.queries.ts';
 import { OnTheWay } from '#src/features/today/OnTheWay.tsx';
 import { formatCount, formatLongDay, todayIn } from '#src/lib/format.ts';
@@ -31,6 +33,7 @@ export function Component() {
   const now = due.data?.filter(({ standing }) => standing !== 'coming') ?? [];
   const late = now.filter(({ daysLate, standing }) => daysLate > 0 && standing !== 'due').length;
   const faultName = (slug: string) => faults.data?.find((fault) => fault.slug === slug)?.name ?? slug;
+  const unsent = useUploads().uploads;
   const failed = [due, way, making].find((query) => query.isError);
   const isEmpty = way.isSuccess && making.isSuccess && loaves.length === 0 && open.length === 0;
   return (
@@ -57,6 +60,7 @@ export function Component() {
           {now.length > SHOWN && <BlockLink to={paths.inspect} kind="quiet" className="mt-3">All {now.length}</BlockLink>}
         </section>
         <section>
+          {unsent.length > 0 && <div className="mb-8"><Rail heading="Photos on their way" aside={formatCount(unsent.length, 'photo')} /><UploadList uploads={unsent} withBatch /></div>}
           <Rail heading="On the bench" aside={formatCount(open.length, 'batch', 'batches')} />
           {open.length === 0 ? <EmptyState title="Nothing planned or in the making" /> : (
             <ul>
