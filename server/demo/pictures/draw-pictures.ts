@@ -24,7 +24,7 @@ type Answer = { at: number; picture: Picture } | { at: number; failure: string }
  */
 export async function drawPictures(wishes: readonly PictureWish[], { workers, onDone }: DrawPictures): Promise<void> {
   let next = 0;
-  const threads = Array.from({ length: Math.max(1, Math.min(workers, wishes.length)) }, () => new Worker(startTypeScript, { eval: true, workerData: new URL('picture-worker.ts', import.meta.url).href }));
+  const threads = Array.from({ length: Math.min(workers, wishes.length) }, () => new Worker(startTypeScript, { eval: true, workerData: new URL('picture-worker.ts', import.meta.url).href }));
   try {
     await Promise.all(threads.map((thread) => new Promise<void>((resolve, reject) => {
       const sendNext = () => {

@@ -30,7 +30,7 @@ const leans = (cell: CauseCell) => (['settled', 'likely', 'hint'].includes(cell.
 const isFirm = (cell: CauseCell) => cell.grade === 'settled' || cell.grade === 'likely';
 
 beforeAll(async () => {
-  await loadDemo(app().database.ownerUrl, { today: '2026-08-31', report: () => undefined, uploadsDir: app().uploadsDir });
+  await loadDemo(app().database.ownerUrl, { today: '2026-08-31', report: () => undefined, uploadsDir: app().uploadsDir, mostPhotos: 0 });
   const signedIn = await request(app().url).post('/api/session').send({ email: 'ilse@quernbyloft.example', password: demoPassword });
   cookie = sessionCookie(signedIn);
   [whole, cold] = [await read<CausesBoard>('/api/causes'), await read<CausesBoard>('/api/causes?family=cold')];
