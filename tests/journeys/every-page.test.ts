@@ -41,7 +41,7 @@ describe.each([
     expect(broken).toEqual([]);
     expect(complaints).toEqual([]);
     await context.close();
-  });
+  }, 400_000);
 
   it('says what to do next where there is nothing yet', async () => {
     const { page, context } = await signedInPage(browser(), app(), empty.owner, { width, room });
@@ -52,7 +52,7 @@ describe.each([
       expect(violations.map(({ id }) => id), address).toEqual([]);
     }
     await context.close();
-  });
+  }, 400_000);
 });
 
 describe('the door', () => {
