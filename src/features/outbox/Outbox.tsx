@@ -15,7 +15,7 @@ export function Outbox() {
   return (
     <section className="grid max-w-3xl gap-6">
       <Rail heading="Outbox" aside={formatCount(mails.data.length, 'mail')} />
-      <p className="text-ink-2">This machine sends no mail: what would leave waits here. In production mails go out and this page is not there.</p>
+      <p className="text-ink-2">This machine sends no mail: what would leave waits here. The page is not there in production.</p>
       {mails.data.length === 0 && <EmptyState title="No mails yet.">Invite somebody, or ask for a new password at the door.</EmptyState>}
       {mails.data.map(({ id, recipient, subject, body, createdAt }) => (
         <article key={id} className="grid gap-2 border-b border-line pb-5">
