@@ -21,7 +21,6 @@ export function BatchShelf({ batch, toLook }: { batch: AnyBatchView; toLook: (st
   if (inspections.isError) return <ErrorState error={inspections.error} onRetry={() => void inspections.refetch()} />;
   const pictures = photos.data ?? [];
   const places = stageShelf(batch, inspections.data, pictures);
-  const untied = pictures.filter((photo) => photo.stage === null).length;
   return (
     <>
       <div role="region" aria-label="From the making to now" tabIndex={0} className="relative overflow-x-auto pb-1">
@@ -32,7 +31,6 @@ export function BatchShelf({ batch, toLook }: { batch: AnyBatchView; toLook: (st
         </ol>
       </div>
       {photos.isError && <p className="text-note">The photos could not be read just now. <button type="button" className="underline underline-offset-3 coarse:min-h-12" onClick={() => void photos.refetch()}>Try again</button></p>}
-      {untied > 0 && <p className="text-note text-ink-2">{untied === 1 ? '1 photo has' : `${untied} photos have`} no stage yet.</p>}
     </>
   );
 }

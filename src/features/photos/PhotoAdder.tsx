@@ -39,7 +39,8 @@ export function PhotoAdder({ batchId, batchCode, stage }: UploadTo) {
       onDrop={(event) => { event.preventDefault(); setOver(false); take(event.dataTransfer.files); }}
     >
       <div className="flex flex-wrap items-center gap-2">
-        <Block className="hidden coarse:inline-flex max-rack:flex-1" onClick={() => camera.current?.click()}><Camera size={18} aria-hidden="true" />Take a photo</Block>
+        {/* A camera is asked for where there are fingers; elsewhere it would open the same file list twice. */}
+        <span className="hidden coarse:contents"><Block className="max-rack:flex-1" onClick={() => camera.current?.click()}><Camera size={18} aria-hidden="true" />Take a photo</Block></span>
         <Block className="max-rack:flex-1" onClick={() => files.current?.click()}><ImagePlus size={18} aria-hidden="true" />Choose photos</Block>
         <p className="text-note text-ink-2 coarse:hidden">{isOver ? 'Let go to add them' : 'or drop them here.'} JPEG, PNG or WebP, up to {PHOTO_LIMITS.fileBytes / 1024 / 1024} MiB each.</p>
       </div>

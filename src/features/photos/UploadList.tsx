@@ -1,4 +1,4 @@
-import { RotateCw, X } from 'lucide-react';
+import { ImageOff, RotateCw, X } from 'lucide-react';
 import { ProgressBar } from '#src/components/ProgressBar.tsx';
 import { formatNumber } from '#src/lib/format.ts';
 import { useUploads } from './Uploads.tsx';
@@ -11,7 +11,7 @@ export function UploadList({ uploads, withBatch = false }: { uploads: readonly U
   const { queue } = useUploads();
   if (uploads.length === 0) return null;
   return (
-    <ul aria-label="Photos on their way" className="grid gap-px">
+    <ul aria-label="Photos on their way" className="grid max-w-3xl gap-px">
       {uploads.map((upload) => (
         <li key={upload.id} className="flex items-center gap-3 border-t border-line py-1.5">
           <Preview upload={upload} />
@@ -32,8 +32,8 @@ export function UploadList({ uploads, withBatch = false }: { uploads: readonly U
 /** The picture as it lies on this device; nothing where the browser cannot show it. */
 function Preview({ upload }: { upload: Upload }) {
   return (
-    <span className="size-12 shrink-0 overflow-hidden bg-well">
-      {upload.state !== 'refused' && <img src={upload.preview} alt="" width={48} height={48} className="size-full object-cover" onError={(event) => event.currentTarget.remove()} />}
+    <span className="grid size-12 shrink-0 place-items-center overflow-hidden bg-well text-[#000]">
+      {upload.state === 'refused' ? <ImageOff size={20} aria-hidden="true" /> : <img src={upload.preview} alt="" width={48} height={48} className="size-full object-cover" onError={(event) => event.currentTarget.remove()} />}
     </span>
   );
 }
