@@ -72,6 +72,10 @@ export function BarPicker({ bars, onChange }: BarPickerProps) {
               painting.current = { answer: next, hold: setTimeout(() => { set(index, 'not-checked'); stop(); }, HOLD_MS) };
               set(index, next);
             }}
+            onClick={(event) => {
+              // A screen reader presses without a pointer; a finger's own click was answered when it came down.
+              if (event.detail === 0) set(index, answer === 'found' ? 'clear' : 'found');
+            }}
             onKeyDown={(event) => {
               if (event.key === ' ' || event.key === 'Enter') { event.preventDefault(); set(index, answer === 'found' ? 'clear' : 'found'); }
               if (event.key === 'Delete' || event.key === 'Backspace') { event.preventDefault(); set(index, 'not-checked'); }

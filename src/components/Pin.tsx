@@ -36,7 +36,7 @@ export function Pin({ mark, view, fault, name, severity, isChosen = false, onCho
         type="button"
         aria-label={`${name}${severity ? `, severity ${severity}` : ''}, ${isArea ? 'area' : 'point'}`}
         aria-pressed={isChosen}
-        className={`absolute flex min-h-8 items-center rounded-bar px-1 ring-2 ring-[#17191a] [--color-ink:#17191a] [--color-lift:#fdfdfc] ${isChosen ? 'z-10 bg-pin' : 'bg-[#fdfdfc]'} text-[#17191a] ${isArea ? 'translate-x-2 -translate-y-3/5' : '-translate-x-1/2 -translate-y-[calc(100%+9px)]'}`}
+        className={`absolute flex coarse:before:absolute coarse:before:-inset-x-1 coarse:before:-inset-y-2 coarse:before:content-[''] min-h-8 items-center rounded-bar px-1 ring-2 ring-[#17191a] [--color-ink:#17191a] [--color-lift:#fdfdfc] ${isChosen ? 'z-10 bg-pin' : 'bg-[#fdfdfc]'} text-[#17191a] ${isArea ? 'translate-x-2 -translate-y-3/5' : '-translate-x-1/2 -translate-y-[calc(100%+9px)]'}`}
         style={{ left: `${at.x * 100}%`, top: `${at.y * 100}%` }}
         onClick={onChoose}
         onKeyDown={(event) => {

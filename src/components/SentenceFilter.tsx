@@ -20,7 +20,7 @@ interface PickerProps {
   onClear?: () => void;
 }
 
-const WORDS = 'cursor-pointer border-b-2 border-ink px-0.5 pb-px font-[640] data-hovered:bg-tray coarse:py-2.5';
+const WORDS = 'cursor-pointer border-b-2 border-ink px-0.5 pb-px font-[640] data-hovered:bg-tray coarse:py-3';
 
 /** An underlined part of the sentence that opens its choices. */
 export function Picker({ label, children, options, selected, onChange, isMultiple = false, onClear }: PickerProps) {

@@ -1,22 +1,19 @@
-import { Block } from '#src/components/Block.tsx';
-import { Rail } from '#src/components/Rail.tsx';
+import { ActPieces } from '../pieces/ActPieces.tsx';
+import { EvidencePieces } from '../pieces/EvidencePieces.tsx';
+import { FieldPieces } from '../pieces/FieldPieces.tsx';
+import { SoapPieces } from '../pieces/SoapPieces.tsx';
 
-/** All pieces together, for whoever works on them. */
+const PAIR = 'grid gap-9 bench:grid-cols-2 *:min-w-0';
+
+/** All pieces together, for whoever works on them; nothing here is a record. */
 export function Component() {
   return (
-    <div className="grid gap-9">
+    <div className="grid gap-9 *:min-w-0">
       <h1>Pieces</h1>
-      <section className="grid gap-4">
-        <Rail heading="Blocks" />
-        <div className="flex flex-wrap gap-3">
-          <Block kind="main">Keep</Block>
-          <Block>Look</Block>
-          <Block kind="quiet">Leave for now</Block>
-          <Block kind="stop">Hold the batch</Block>
-          <Block waitsFor="Scent waits for the check">Scent in</Block>
-          <Block kind="main" busy="Keeping …">Keep</Block>
-        </div>
-      </section>
+      <div className={PAIR}><SoapPieces /></div>
+      <div className={PAIR}><EvidencePieces /></div>
+      <div className={PAIR}><ActPieces /></div>
+      <FieldPieces />
     </div>
   );
 }

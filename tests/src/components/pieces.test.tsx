@@ -1,4 +1,4 @@
-import { render, screen } from '@testing-library/react';
+import { act, fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
 import { describe, expect, it, vi } from 'vitest';
@@ -33,6 +33,38 @@ describe('BarPicker', () => {
     expect(screen.getByText('1 of 5')).toBeInTheDocument();
     expect(screen.getByRole('button', { name: 'Bar 1, not looked at' })).toBeInTheDocument();
     expect(screen.getByRole('button', { name: 'Bar 2' })).toHaveAttribute('aria-pressed', 'true');
+  });
+});
+
+describe('BarPicker under a finger', () => {
+  it('says not looked at while a bar is held', () => {
+    vi.useFakeTimers();
+    render(<Bars count={6} />);
+    fireEvent.pointerDown(screen.getByRole('button', { name: 'Bar 3' }));
+    act(() => vi.advanceTimersByTime(500));
+    vi.useRealTimers();
+    expect(screen.getByRole('button', { name: 'Bar 3, not looked at' })).toBeInTheDocument();
+    expect(screen.getByText('0 of 5')).toBeInTheDocument();
+  });
+
+  it('paints the bars that a finger is drawn across, all alike', () => {
+    render(<Bars count={6} />);
+    const bar = (number: number) => screen.getByRole('button', { name: `Bar ${number}` });
+    fireEvent.pointerDown(bar(2));
+    for (const number of [3, 4]) {
+      const under = vi.spyOn(document, 'elementFromPoint').mockReturnValue(bar(number));
+      fireEvent.pointerMove(bar(2));
+      under.mockRestore();
+    }
+    fireEvent.pointerUp(bar(2));
+    fireEvent.pointerMove(bar(2));
+    expect(screen.getByText('3 of 6')).toBeInTheDocument();
+  });
+
+  it('hears the press of a screen reader, which has no pointer', () => {
+    render(<Bars count={6} />);
+    fireEvent.click(screen.getByRole('button', { name: 'Bar 1' }), { detail: 0 });
+    expect(screen.getByText('1 of 6')).toBeInTheDocument();
   });
 });
 
