@@ -41,7 +41,7 @@ async function runProject(project, env) {
     const { numPassedTests, numFailedTests, numFailedTestSuites, numTotalTests } = JSON.parse(readFileSync(report, 'utf8'));
     counts.passed += numPassedTests;
     // A file that could not even be loaded has no failed test of its own.
-    counts.failed += Math.max(numFailedTests, broke ? Math.max(1, numFailedTestSuites) : 0);
+    counts.failed += numFailedTests || (broke ? Math.max(1, numFailedTestSuites) : 0);
     console.log(`${project}: ${numTotalTests} tests in ${((Date.now() - start) / 1000).toFixed(1)} s`);
   } catch {
     counts.failed += 1;

@@ -28,7 +28,7 @@ export function Pin({ mark, view, fault, name, severity, isChosen = false, onCho
   const at = toStage(view, mark);
   const isArea = Boolean(mark.width && mark.height);
   const end = isArea ? toStage(view, { x: mark.x + (mark.width ?? 0), y: mark.y + (mark.height ?? 0) }) : at;
-  const tint = isChosen ? 'border-pin' : 'border-white';
+  const tint = isChosen ? 'border-pin' : 'border-[#fff]';
   return (
     <>
       {isArea && <div aria-hidden="true" className={`pointer-events-none absolute rounded-[2px] border-[2.5px] outline-2 outline-[#17191a] ${tint}`} style={{ left: `${at.x * 100}%`, top: `${at.y * 100}%`, width: `${(end.x - at.x) * 100}%`, height: `${(end.y - at.y) * 100}%` }} />}

@@ -22,8 +22,8 @@ describe('handing the supplier a CSV', () => {
     }
     const { page, complaints, context } = await signedInPage(browser(), app(), world.owner);
     await page.goto('/claims/new');
-    await page.getByLabel('Supplier').selectOption({ label: 'Gannet Aromas' });
-    await page.getByLabel('Title').fill('Air pockets');
+    await page.getByRole('combobox', { name: 'Supplier' }).selectOption({ label: 'Gannet Aromas' });
+    await page.getByRole('textbox', { name: 'Title' }).fill('Air pockets');
     await page.getByLabel(/GA-77/).check();
     await page.getByLabel('Air pockets', { exact: true }).check();
     await page.getByRole('button', { name: 'Draft the claim' }).click();
