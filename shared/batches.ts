@@ -164,7 +164,6 @@ export const BatchesFilter = z.object({
   order: z.enum(['asc', 'desc']).default('desc'),
 });
 export type BatchesFilter = z.infer<typeof BatchesFilter>;
-export type BatchesFilterInput = z.input<typeof BatchesFilter>;
 
 export const Mould = z.object({ ...recordFields, name: z.string(), oilMassG: z.number().nullable(), bars: z.int().nullable() });
 export type Mould = z.infer<typeof Mould>;

@@ -96,7 +96,6 @@ export const NewInspection = z.strictObject({
   readings: z.array(ReadingWish).max(40).default([]),
 });
 export type NewInspection = z.infer<typeof NewInspection>;
-export type NewInspectionInput = z.input<typeof NewInspection>;
 
 export const ChangeInspection = changeOf({ ...inspectionFields, answers: ChecklistAnswers });
 export type ChangeInspection = z.infer<typeof ChangeInspection>;

@@ -3,7 +3,6 @@
  * imports them, so that a package can be changed in one place.
  */
 import chisquareCdf from '@stdlib/stats-base-dists-chisquare-cdf';
-import chisquareQuantile from '@stdlib/stats-base-dists-chisquare-quantile';
 import gammaCdf from '@stdlib/stats-base-dists-gamma-cdf';
 import gammaQuantile from '@stdlib/stats-base-dists-gamma-quantile';
 import normalCdf from '@stdlib/stats-base-dists-normal-cdf';
@@ -34,11 +33,6 @@ export function normalPoint(p: number): number {
 export function chisquareUpper(x: number, df: number): number {
   if (x <= 0) return 1;
   return df === 1 ? 2 * normalCdf(-Math.sqrt(x), 0, 1) : 1 - chisquareCdf(x, df);
-}
-
-/** The x with P(X ≤ x) = p of chi-square. */
-export function chisquarePoint(p: number, df: number): number {
-  return chisquareQuantile(p, df);
 }
 
 /** P(X > x) of a gamma distribution with this shape and rate. */

@@ -1,5 +1,6 @@
 import type { BatchesChoice } from '#shared/batches.ts';
 import { METHODS, familyOf } from '#shared/words/methods.ts';
+import { escapeLike } from '#server/db/like.ts';
 
 /** A `where` over `batch b` joined to its `batch_outcome o`, with its parameters. */
 export interface Where {
@@ -26,7 +27,7 @@ export function whereOf(filter: BatchesChoice): Where {
   when(filter.to, () => `b.made_on <= ${value(filter.to)}::date`);
   when(filter.fault ?? filter.answer, () => answered(filter, value));
   when(filter.find?.trim(), () => {
-    const part = `${value(`%${(filter.find ?? '').trim().replaceAll(/[\\%_]/g, (sign) => `\\${sign}`)}%`)}::text`;
+    const part = `${value(`%${escapeLike((filter.find ?? '').trim())}%`)}::text`;
     return `(b.code ilike ${part} or b.note ilike ${part}
       or b.formula_id in (select f.id from formula f where f.name ilike ${part})
       or b.id in (select i.batch_id from batch_ingredient i join lot l on l.workshop_id = i.workshop_id and l.id = i.lot_id where l.code ilike ${part}))`;

@@ -9,13 +9,22 @@ import { Claim } from './claim.entity.ts';
 /** Rows shown before anything goes out. */
 const PREVIEWED = 30;
 
-export async function claimView(tx: WorkshopTransaction, claim: Claim): Promise<ClaimView> {
-  const supplier = await tx.row<{ name: string }>('select name from supplier where id = $1', [claim.supplierId]);
+/** Views of claims, with the names of their suppliers and lots read by two statements, however many there are. */
+async function claimViews(tx: WorkshopTransaction, claims: readonly Claim[]): Promise<ClaimView[]> {
+  const suppliers = await tx.rows<{ id: string; name: string }>('select id, name from supplier where id = any($1::uuid[])', [claims.map(({ supplierId }) => supplierId)]);
   const lots = await tx.rows<{ id: string; code: string; materialName: string }>(
     `select l.id, l.code, m.name "materialName" from lot l join material m on m.workshop_id = l.workshop_id and m.id = l.material_id where l.id = any($1::uuid[]) order by l.code`,
-    [claim.lotIds],
+    [claims.flatMap(({ lotIds }) => lotIds)],
   );
-  return { ...claim, createdAt: claim.createdAt.toISOString(), updatedAt: claim.updatedAt.toISOString(), supplierName: supplier?.name ?? '', lots };
+  const names = new Map(suppliers.map(({ id, name }) => [id, name]));
+  return claims.map((claim) => ({
+    ...claim, createdAt: claim.createdAt.toISOString(), updatedAt: claim.updatedAt.toISOString(),
+    supplierName: names.get(claim.supplierId) ?? '', lots: lots.filter(({ id }) => claim.lotIds.includes(id)),
+  }));
+}
+
+export async function claimView(tx: WorkshopTransaction, claim: Claim): Promise<ClaimView> {
+  return (await claimViews(tx, [claim]))[0] as ClaimView;
 }
 
 /** A claim as it is kept. @throws Problem 404 */
@@ -32,9 +41,7 @@ export async function readClaim(tx: WorkshopTransaction, claimId: string): Promi
 /** The last two hundred claims, newest first. */
 export async function listClaims(tx: WorkshopTransaction): Promise<{ items: ClaimView[] }> {
   const claims = await tx.manager.find(Claim, { order: { number: 'DESC' }, take: 200 });
-  const items: ClaimView[] = [];
-  for (const claim of claims) items.push(await claimView(tx, claim));
-  return { items };
+  return { items: await claimViews(tx, claims) };
 }
 
 /** Today in the workshop's zone. */

@@ -1,4 +1,4 @@
-import type { ImportMapping, ImportReport } from '#shared/imports.ts';
+import type { ImportReport } from '#shared/imports.ts';
 import type { WorkshopTransaction } from '#server/db/workshop-transaction.ts';
 import type { HistoryRow } from './read-row.ts';
 
@@ -67,5 +67,3 @@ export function notKnown(kind: Creatable, name: string): string {
 
 /** The field each kind's names stand in. */
 export const COLUMN_OF: Record<Creatable, string> = { lots: 'fragrance_lots', formulas: 'formula', people: 'maker', moulds: 'mould', colourants: 'colourants' };
-
-export type MayCreate = ImportMapping['create'];

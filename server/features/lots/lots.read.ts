@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import type { LotsFilter, LotStandingChange, LotView } from '#shared/lots.ts';
 import { pageFrom, readCursor } from '#server/db/keyset.ts';
+import { escapeLike } from '#server/db/like.ts';
 import type { WorkshopTransaction } from '#server/db/workshop-transaction.ts';
 import { notFound } from '#server/problem.ts';
 
@@ -45,10 +46,6 @@ export async function listLots(tx: WorkshopTransaction, filter: z.output<typeof 
   ]);
   const { items, next } = pageFrom(rows, filter.limit, (row) => [row.receivedOn ?? '1990-01-01', row.id]);
   return { items: items.map(lotView), next };
-}
-
-function escapeLike(text: string): string {
-  return text.replaceAll(/[\\%_]/g, (sign) => `\\${sign}`);
 }
 
 /** Who changed a lot's standing, when and why, newest first. @throws Problem 404 */

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
-import { open, stat } from 'node:fs/promises';
+import { open } from 'node:fs/promises';
 import { pipeline } from 'node:stream/promises';
 import { fileTypeFromBuffer } from 'file-type';
 import sharp, { type Metadata, type SharpOptions } from 'sharp';
@@ -96,9 +96,4 @@ export async function sha256Of(file: string): Promise<string> {
   const hash = createHash('sha256');
   await pipeline(createReadStream(file), hash);
   return hash.digest('hex');
-}
-
-/** Size of a file in bytes. */
-export async function bytesOf(file: string): Promise<number> {
-  return (await stat(file)).size;
 }
